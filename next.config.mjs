@@ -1,0 +1,11 @@
+/** @type {import('next').NextConfig} */
+export default {
+  // Tests build into a folder of their own so that they never disturb a running app.
+  distDir: process.env.NEXT_DIST_DIR ?? '.next',
+  poweredByHeader: false,
+  reactStrictMode: true,
+  // A path with a trailing slash is answered by our own 404 instead of a redirect.
+  skipTrailingSlashRedirect: true,
+  // Database drivers are loaded by Node as they are; bundling them breaks their optional requires.
+  serverExternalPackages: ['knex', 'pg', 'rate-limiter-flexible'],
+};

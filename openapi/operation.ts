@@ -77,8 +77,14 @@ export function problemsOf(operation: Operation): ProblemSlug[] {
     if (operation.method !== 'get') slugs.push('cross-origin');
   }
   if (operation.parameters) slugs.push('not-found');
-  if (operation.query) slugs.push('malformed-request', 'invalid-input');
-  if (operation.body) slugs.push('malformed-request', 'body-too-large', 'unsupported-media-type', 'invalid-input');
+  slugs.push('malformed-request', 'invalid-input');
+  if (operation.body) slugs.push('body-too-large', 'unsupported-media-type');
+  if (isTaggedRead(operation)) slugs.push('precondition-failed');
   if (operation.conditional) slugs.push('precondition-failed', 'precondition-required');
   return [...new Set([...slugs, ...(operation.problems ?? [])])];
+}
+
+/** A read whose answer carries an ETag answers 304 and 412 to conditional requests. */
+export function isTaggedRead({ method, answers }: Operation): boolean {
+  return method === 'get' && answers[200]?.headers?.includes('ETag') === true;
 }

@@ -1,0 +1,5 @@
+import { listCalculations } from '@/openapi/operations/catalogue';
+import { listCalculations as list } from '../_request/describe';
+import { handle, serve } from '../_request/serve';
+
+export const { GET, HEAD, POST, PUT, PATCH, DELETE, OPTIONS } = serve(handle(listCalculations, list));

@@ -1,0 +1,9 @@
+import { Mark } from './_components/mark';
+
+export default function FrontPage() {
+  return (
+    <main className="mx-auto max-w-page px-7 pt-5">
+      <Mark />
+    </main>
+  );
+}

@@ -1,0 +1,49 @@
+import { cookies } from 'next/headers';
+import Link from 'next/link';
+import type { ReactNode } from 'react';
+import { engineVersion } from '@/lib/solvers/engine';
+import { Mark } from './mark';
+import { PairRule } from './pair-rule';
+import { SkipLink } from './skip-link';
+import { asTheme, themeCookie } from './theme';
+import { ThemeSwitch } from './theme-switch';
+
+interface PublicFrameProps {
+  /** False on the sign-in page itself. */
+  readonly signIn?: boolean;
+  readonly children: ReactNode;
+}
+
+/** Header, column and footer of the pages that need no session. */
+export async function PublicFrame({ signIn = true, children }: PublicFrameProps) {
+  const theme = asTheme((await cookies()).get(themeCookie)?.value);
+  return (
+    <div className="mx-auto flex min-h-dvh max-w-page flex-col px-5 sm:px-7">
+      <SkipLink />
+      <header className="flex flex-wrap items-baseline gap-x-7 gap-y-2 pt-5 pb-3">
+        <Mark />
+        <nav aria-label="Site" className="flex flex-1 gap-[22px] text-ash">
+          <Link href="/reference" className="hover:text-ink">
+            Reference
+          </Link>
+          <Link href="/problems" className="hover:text-ink">
+            Problems
+          </Link>
+        </nav>
+        <div className="flex items-baseline gap-5 text-small">
+          <ThemeSwitch initial={theme} />
+          {signIn && (
+            <Link href="/sign-in" className="link">
+              Sign in
+            </Link>
+          )}
+        </div>
+      </header>
+      <PairRule />
+      <main id="content" className="flex-1">
+        {children}
+      </main>
+      <footer className="pt-12 pb-6 text-fine text-ash">Engine {engineVersion}</footer>
+    </div>
+  );
+}

@@ -1,0 +1,31 @@
+'use client';
+
+import Link from 'next/link';
+import { usePathname } from 'next/navigation';
+
+interface ConsoleNavigationProps {
+  readonly pages: readonly { readonly path: string; readonly title: string }[];
+}
+
+/** Below the name on a phone, beside it elsewhere; the present page stands on the pair in copper. */
+export function ConsoleNavigation({ pages }: ConsoleNavigationProps) {
+  const pathname = usePathname();
+  return (
+    <nav aria-label="Console" className="order-last flex w-full gap-[22px] sm:order-none sm:w-auto">
+      {pages.map(({ path, title }) => {
+        const here = pathname === path || pathname.startsWith(`${path}/`);
+        return (
+          <Link
+            key={path}
+            href={path}
+            aria-current={here ? 'page' : undefined}
+            className={`relative pb-2.5 ${here ? 'text-ink' : 'text-ash hover:text-ink'}`}
+          >
+            {title}
+            {here && <span aria-hidden className="pair absolute inset-x-0 bottom-0 text-copper" />}
+          </Link>
+        );
+      })}
+    </nav>
+  );
+}

@@ -1,0 +1,16 @@
+interface QuotaPairProps {
+  readonly used: number;
+  readonly quota: number;
+  readonly className?: string;
+}
+
+/** Used against allowed, drawn on the pair: the colour of the conductor runs as far as the quota is used. */
+export function QuotaPair({ used, quota, className = '' }: QuotaPairProps) {
+  const share = quota === 0 ? 1 : Math.min(1, used / quota);
+  const colour = share >= 1 ? 'text-garnet' : share >= 0.8 ? 'text-ochre' : 'text-copper';
+  return (
+    <div aria-hidden className={`pair relative text-rule ${className}`}>
+      {share > 0 && <span className={`pair absolute -top-px left-0 ${colour}`} style={{ width: `max(2px, ${100 * share}%)` }} />}
+    </div>
+  );
+}

@@ -12,7 +12,8 @@ export class CursorRefused extends Error {
 }
 
 export async function readCallPage(filter: CallPageFilter) {
-  const { cursor, ...rest } = filter;
+  const { cursor, ...given } = filter;
+  const rest = { ...given, from: utc(given.from), to: utc(given.to) };
   const rows = await listCalls(database(), {
     ...rest,
     before: cursor === undefined ? undefined : readCursor(cursor, rest),
@@ -40,6 +41,11 @@ export async function readCall(organizationId: string, id: string, memberId?: st
     request: parsed(row.request),
     answer: parsed(row.answer),
   };
+}
+
+/** The database reads fewer offsets than the API takes. */
+function utc(moment: string | undefined): string | undefined {
+  return moment && new Date(moment).toISOString();
 }
 
 function callOf(row: CallRow) {

@@ -16,7 +16,7 @@ type Issue = z.core.$ZodIssue;
 type Path = readonly PropertyKey[];
 
 /** More would help nobody, and a list of 20,000 wrong numbers must not make an answer of megabytes. */
-const mostErrors = 100;
+export const mostErrors = 100;
 
 /** An untrusted key or value may be a megabyte long; a sentence is not. */
 const longestQuote = 60;

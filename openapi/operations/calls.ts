@@ -1,7 +1,7 @@
 /** The call log: one row for every answered call of a known caller. */
 import { defineOperation } from '../operation';
 import { z } from '../zod';
-import { callId, cursor, dateTime, keyId, units } from './fields';
+import { callId, cursor, dateTime, keyId, moment, units } from './fields';
 
 const digest = (description: string) =>
   z
@@ -45,14 +45,14 @@ export const callDetailSchema = z
   .meta({ id: 'CallDetail', description: 'One call with its request and answer.' });
 
 export const listCallsQuery = z.strictObject({
-  calculation: z.string().max(100).optional().meta({ description: 'Only this calculation.', examples: ['networks/cascade'] }),
+  calculation: z.string().regex(/^[a-z]+\/[a-z-]+$/).max(100).optional().meta({ description: 'Only this calculation.', examples: ['networks/cascade'] }),
   status: z
     .enum(['2xx', '4xx', '5xx', '422', '429'])
     .optional()
     .meta({ description: 'Only answers of this class or status.', examples: ['4xx'] }),
   key: z.union([keyId, z.literal('none')]).optional().meta({ description: 'Only calls of this key; `none` for calls made on the Bench.', examples: ['jIu9aR5U'] }),
-  from: z.iso.datetime({ offset: true }).max(35).optional().meta({ description: 'Only calls at or after this time.', examples: ['2026-12-01T00:00:00Z'] }),
-  to: z.iso.datetime({ offset: true }).max(35).optional().meta({ description: 'Only calls before this time.', examples: ['2026-12-02T00:00:00Z'] }),
+  from: moment('Only calls at or after this time.', '2026-12-01T00:00:00Z').optional(),
+  to: moment('Only calls before this time.', '2026-12-02T00:00:00Z').optional(),
   cursor: cursor.optional(),
   limit: z.coerce.number().int().min(1).max(100).default(20).meta({ description: 'Rows on a page.', examples: [50] }),
 });

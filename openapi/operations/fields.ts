@@ -4,6 +4,13 @@ import { z } from '../zod';
 export const dateTime = (description: string, example = '2026-12-01T09:30:00.000Z') =>
   z.iso.datetime().max(35).meta({ description, examples: [example] });
 
+/** A moment to search by: any offset, and a year that the database can hold. */
+export const moment = (description: string, example: string) =>
+  z.iso.datetime({ offset: true }).regex(/^[12]/).max(35).meta({ description, examples: [example] });
+
+/** A line of text that comes back as it was sent: no control characters, no half of a surrogate pair. */
+export const lineOfText = () => z.string().regex(/^[^\p{Cc}\p{Cs}]*$/u);
+
 export const optionalDateTime = (description: string) => z.union([dateTime(description), z.null()]).meta({ description, examples: ['2027-01-01T00:00:00.000Z'] });
 
 export const units = (description: string, example = 1200) =>

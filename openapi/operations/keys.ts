@@ -2,10 +2,9 @@
 import { scopes } from '@/lib/auth/permissions';
 import { defineOperation } from '../operation';
 import { z } from '../zod';
-import { dateTime, keyId, optionalDateTime, units } from './fields';
+import { dateTime, keyId, lineOfText, optionalDateTime, units } from './fields';
 
-const name = z
-  .string()
+const name = lineOfText()
   .trim()
   .min(1)
   .max(60)

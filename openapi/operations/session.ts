@@ -2,11 +2,11 @@
 import { roles } from '@/lib/auth/permissions';
 import { defineOperation } from '../operation';
 import { z } from '../zod';
-import { dateTime } from './fields';
+import { dateTime, lineOfText } from './fields';
 
 export const signInBody = z
   .strictObject({
-    email: z.string().trim().min(3).max(254).meta({ title: 'E-mail', description: 'Address of the member.', examples: ['marit@saltmarsh.example'] }),
+    email: lineOfText().trim().min(3).max(254).meta({ title: 'E-mail', description: 'Address of the member.', examples: ['marit@saltmarsh.example'] }),
     password: z.string().min(1).max(200).meta({ title: 'Password', description: 'Password of the member.', examples: ['a long passphrase of your own'] }),
   })
   .meta({ id: 'SignIn', description: 'Who signs in.' });

@@ -1,7 +1,7 @@
 /** Units used against quota, read from the rows that enforce it, and the history from the call log. */
 import { defineOperation } from '../operation';
 import { z } from '../zod';
-import { dateTime, keyId, units } from './fields';
+import { dateTime, keyId, moment, units } from './fields';
 
 const quotaShape = {
   units_used: units('Units used this month, from the row that enforces the quota.'),
@@ -9,8 +9,8 @@ const quotaShape = {
 };
 
 export const usageQuery = z.strictObject({
-  from: z.iso.datetime({ offset: true }).max(35).optional().meta({ description: 'Start of the history; 30 days ago when left out.', examples: ['2026-11-01T00:00:00Z'] }),
-  to: z.iso.datetime({ offset: true }).max(35).optional().meta({ description: 'End of the history; now when left out.', examples: ['2026-12-01T00:00:00Z'] }),
+  from: moment('Start of the history; 30 days ago when left out.', '2026-11-01T00:00:00Z').optional(),
+  to: moment('End of the history; now when left out.', '2026-12-01T00:00:00Z').optional(),
   by: z.enum(['day', 'key', 'calculation']).default('day').meta({ description: 'What the history is summed by; days are UTC.', examples: ['day'] }),
 });
 

@@ -1,7 +1,7 @@
 /** parse: every wrong field at once. A refusal is carried, not thrown, for who calls is answered first. */
 import Negotiator from 'negotiator';
 import { z } from 'zod';
-import { fieldErrors, type FieldError } from '@/lib/problems/field-errors';
+import { fieldErrors, mostErrors, type FieldError } from '@/lib/problems/field-errors';
 import type { Operation } from '@/openapi/operation';
 import { readJsonBody } from './read-body';
 import { Refusal, invalidInput } from './refusal';
@@ -39,7 +39,7 @@ export async function parse(request: Request, operation: Operation, rawParameter
       if (parsedBody.success) body = parsedBody.data;
       else errors.push(...fieldErrors(parsedBody.error.issues));
     }
-    if (errors.length > 0) throw invalidInput(errors);
+    if (errors.length > 0) throw invalidInput(errors.slice(0, mostErrors));
     return { input: { parameters, query: query.data ?? {}, body }, refusal: null, bodyText };
   } catch (error) {
     if (error instanceof Refusal) return { input: null, refusal: error, bodyText };

@@ -51,9 +51,10 @@ async function readBytes(request: Request): Promise<Buffer> {
   }
 }
 
+/** A byte order mark stays and then fails as JSON: RFC 8259 forbids it, and the log keeps what was sent. */
 function decode(bytes: Buffer): string {
   try {
-    return new TextDecoder('utf-8', { fatal: true }).decode(bytes);
+    return new TextDecoder('utf-8', { fatal: true, ignoreBOM: true }).decode(bytes);
   } catch {
     throw new Refusal('malformed-request', 'the body must be UTF-8');
   }

@@ -1,11 +1,12 @@
 import Link from 'next/link';
 import type { ComponentProps } from 'react';
 
-type Variant = 'primary' | 'ghost' | 'destructive';
+type Variant = 'primary' | 'ghost' | 'destructive' | 'ghost-destructive';
 
 const looks: Record<Variant, string> = {
   primary: 'border-copper bg-copper text-paper font-semibold enabled:hover:brightness-110',
   ghost: 'border-edge bg-transparent text-ink font-medium enabled:hover:bg-wash',
+  'ghost-destructive': 'border-edge bg-transparent text-garnet font-medium enabled:hover:bg-wash',
   destructive: 'border-garnet bg-garnet text-paper font-semibold enabled:hover:brightness-110',
 };
 

@@ -15,7 +15,7 @@ interface CodeBlockProps {
 
 export function CodeBlock({ code, label, wrap = false, tall = false, className = '' }: CodeBlockProps) {
   return (
-    <div className={`group relative rounded-field bg-wash ${className}`}>
+    <div className={`relative rounded-field bg-wash ${className}`}>
       <pre
         tabIndex={0}
         role="region"
@@ -24,7 +24,10 @@ export function CodeBlock({ code, label, wrap = false, tall = false, className =
       >
         {code}
       </pre>
-      <CopyButton text={code} of={label} className="absolute top-2.5 right-3" />
+      {/* A patch of the ground behind it: long lines pass beneath the button, not through it. */}
+      <div className="absolute top-0 right-0 rounded-field bg-wash pt-2.5 pr-3 pb-1 pl-2">
+        <CopyButton text={code} of={label} />
+      </div>
     </div>
   );
 }

@@ -48,5 +48,6 @@ function fieldOf({ pointer = '' }: FieldError): string {
 function sentence<Values>(error: FieldError, labels: Labels<Values>): string {
   const field = fieldOf(error);
   const label = labels[field as keyof Values];
+  if (label && error.detail.endsWith('got ""')) return `${label} is missing`;
   return label && error.detail.startsWith(`${field} `) ? label + error.detail.slice(field.length) : error.detail;
 }

@@ -7,7 +7,7 @@ interface ConsoleNavigationProps {
   readonly pages: readonly { readonly path: string; readonly title: string }[];
 }
 
-/** Below the name on a phone, beside it elsewhere; the present page stands on the pair in copper. */
+/** Below the name on a phone, beside it elsewhere. Over the present page's word the rule beneath turns to copper. */
 export function ConsoleNavigation({ pages }: ConsoleNavigationProps) {
   const pathname = usePathname();
   return (
@@ -22,7 +22,7 @@ export function ConsoleNavigation({ pages }: ConsoleNavigationProps) {
             className={`relative pb-2.5 ${here ? 'text-ink' : 'text-ash hover:text-ink'}`}
           >
             {title}
-            {here && <span aria-hidden className="pair absolute inset-x-0 bottom-0 text-copper" />}
+            {here && <span aria-hidden className="pair absolute inset-x-0 -bottom-[5px] bg-paper text-copper" />}
           </Link>
         );
       })}

@@ -9,6 +9,7 @@ import { EmptyState } from '@/app/_components/empty-state';
 import { FailureNotice } from '@/app/_components/failure-notice';
 import { LoadingPair } from '@/app/_components/loading-pair';
 import { PageTitle } from '@/app/_components/page-title';
+import { firstCall } from '@/app/console/keys/_components/first-call';
 import type { Call } from './call';
 import { callsPath, filtersOf, queryOf, type CallFilters } from './call-filters';
 import { CallTable } from './call-table';
@@ -104,7 +105,7 @@ function NoCalls({ filtered, onClear }: { readonly filtered: boolean; readonly o
   return (
     <EmptyState
       title="No call yet"
-      command={`curl -s ${window.location.origin}/api/v1/lines/secondary-constants \\\n  -H "Authorization: Bearer $LINEWRIGHT_KEY" \\\n  -H "Content-Type: application/json" \\\n  -d '{"line":{"kind":"lossless","characteristic_impedance_ohm":75,"velocity_factor":0.66},"frequency_hz":1e8}'`}
+      command={firstCall(window.location.origin, ['lines:run'])}
       actions={<ButtonLink href="/console/bench">To the Bench</ButtonLink>}
     >
       The first call appears here as soon as it is answered. Make it on the Bench, or with a key:

@@ -19,7 +19,7 @@ interface Named {
 export function FilterBar({ filters, readsKeys, onChange }: FilterBarProps) {
   const { data: keys } = useSWR<{ readonly data: readonly Named[] }>(readsKeys ? '/keys' : null);
   const { data: calculations } = useSWR<{ readonly data: readonly { readonly path: string }[] }>('/calculations');
-  const width = 'w-full sm:w-auto sm:min-w-36 sm:max-w-64 sm:flex-1';
+  const width = 'w-full sm:w-auto sm:min-w-36 sm:flex-1';
   return (
     <div className="mb-4 grid grid-cols-2 gap-3 sm:flex sm:flex-wrap" role="search" aria-label="Filter calls">
       {readsKeys && (

@@ -61,8 +61,7 @@ export function KeyFields<Body>({ form }: { readonly form: UseFormReturn<KeyValu
         mono
         rows={2}
         spellCheck={false}
-        placeholder="198.51.100.0/24"
-        help="One address or network a line. Empty: the key works from anywhere."
+        help="One address or network a line, such as 198.51.100.0/24. Empty: the key works from anywhere."
         error={addressError(errors.allowed_addresses)}
         {...register('allowed_addresses')}
       />

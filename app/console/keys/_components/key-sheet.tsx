@@ -68,7 +68,7 @@ export function KeySheet({ shown: key, canManage, onChange, onRevoke, onClose }:
             <Button variant="ghost" onClick={onChange}>
               Change
             </Button>
-            <Button variant="ghost" className="text-garnet" onClick={onRevoke}>
+            <Button variant="ghost-destructive" onClick={onRevoke}>
               Revoke
             </Button>
           </>

@@ -32,7 +32,7 @@ export function KeyTable({ keys, onOpen }: KeyTableProps) {
             {row.original.name}
           </button>
         ),
-        meta: { className: 'w-full max-w-0' },
+        meta: { className: 'w-full max-w-0 min-w-32 lg:min-w-48' },
       }),
       column.accessor('display', { header: 'Key', enableSorting: false, meta: { className: `whitespace-nowrap text-ash ${fromDesktop}`, mono: true } }),
       column.accessor(({ scopes }) => scopesInWords(scopes), {
@@ -40,7 +40,7 @@ export function KeyTable({ keys, onOpen }: KeyTableProps) {
         header: 'Scopes',
         enableSorting: false,
         cell: ({ row, getValue }) => (
-          <span className="block max-w-56 truncate" title={row.original.scopes.join(', ')}>
+          <span className="block max-w-48 truncate" title={row.original.scopes.join(', ')}>
             {getValue()}
           </span>
         ),
@@ -49,10 +49,10 @@ export function KeyTable({ keys, onOpen }: KeyTableProps) {
       column.accessor('units_used', {
         header: 'Units used',
         cell: ({ row: { original: key } }) => (
-          <span className="inline-block text-right">
+          <span className="block">
             <span>{formatCount(key.units_used)}</span>
             <span className="text-ash"> / {formatCount(key.monthly_unit_quota)}</span>
-            <QuotaPair used={key.units_used} quota={key.monthly_unit_quota} className="mt-px mb-1 min-w-24" />
+            <QuotaPair used={key.units_used} quota={key.monthly_unit_quota} className="mt-px mb-1 min-w-20" />
           </span>
         ),
         meta: { numeric: true },

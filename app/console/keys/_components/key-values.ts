@@ -59,16 +59,18 @@ export function bodyOf(values: KeyValues) {
   };
 }
 
-/** "12,000", "12 000" and "12000" are one number; anything else is left for the schema to name. */
-function numberOf(text: string): number | string | undefined {
+/**
+ * "12,000", "12 000" and "12000" are one number; anything else is left for the schema to name. An empty
+ * field stays an empty text: left out, it would silently become the API's default.
+ */
+function numberOf(text: string): number | string {
   const digits = text.replace(/[\s,_]/g, '');
-  if (digits === '') return undefined;
   return /^-?\d+(\.\d+)?$/.test(digits) ? Number(digits) : text;
 }
 
-function expiryOf({ expires, expires_on: on }: KeyValues): string | null | undefined {
+function expiryOf({ expires, expires_on: on }: KeyValues): string | null {
   if (expires === 'never') return null;
-  if (expires === 'at') return Number.isNaN(Date.parse(on)) ? undefined : new Date(on).toISOString();
+  if (expires === 'at') return Number.isNaN(Date.parse(on)) ? '' : new Date(on).toISOString();
   const day = new Date();
   day.setDate(day.getDate() + Number(expires));
   return day.toISOString();

@@ -13,6 +13,7 @@ export interface FieldError {
 }
 
 type Issue = z.core.$ZodIssue;
+type UnionIssue = Extract<Issue, { code: 'invalid_union' }>;
 type Path = readonly PropertyKey[];
 
 /** More would help nobody, and a list of 20,000 wrong numbers must not make an answer of megabytes. */
@@ -116,12 +117,22 @@ function kind(expected: string): string {
  * Of a union's branches, the one that the value came nearest to speaks: the branch whose own shape was
  * met and that has the fewest complaints. When no branch was met, the accepted shapes are listed.
  */
-function errorsOfUnion(issue: Extract<Issue, { code: 'invalid_union' }>, path: Path): FieldError[] {
-  const entered = issue.errors.filter((branch) => !branch.some(refusesShape));
+function errorsOfUnion(issue: UnionIssue, path: Path): FieldError[] {
+  const branches = branchesOf(issue);
+  const entered = branches.filter((branch) => !branch.some(refusesShape));
   const nearest = entered.toSorted((a, b) => complaints(a) - complaints(b))[0];
   if (nearest) return nearest.flatMap((inner) => errorsOf(inner, path));
-  const shapes = new Set(issue.errors.flatMap((branch) => branch.filter(refusesShape).flatMap(shapesOf)));
+  const shapes = new Set(branches.flatMap((branch) => branch.filter(refusesShape).flatMap(shapesOf)));
   return [fieldError(path, issue.input === undefined ? 'required' : 'invalid_type', `must be ${[...shapes].join(' or ')}${got(issue.input)}`)];
+}
+
+/** A union within a union is one with all their branches. */
+function branchesOf(issue: UnionIssue): (readonly Issue[])[] {
+  return issue.errors.flatMap((branch): (readonly Issue[])[] => {
+    const [inner] = branch;
+    const isUnion = branch.length === 1 && inner?.code === 'invalid_union' && inner.path.length === 0 && inner.errors.length > 0;
+    return isUnion ? branchesOf(inner) : [branch];
+  });
 }
 
 function complaints(branch: readonly Issue[]): number {

@@ -9,7 +9,7 @@ import { EmptyState } from '@/app/_components/empty-state';
 import { FailureNotice } from '@/app/_components/failure-notice';
 import { LoadingPair } from '@/app/_components/loading-pair';
 import { PageTitle } from '@/app/_components/page-title';
-import { firstCall } from '@/app/console/keys/_components/first-call';
+import { firstCall } from '@/app/console/_components/first-call';
 import type { Call } from './call';
 import { callsPath, filtersOf, queryOf, type CallFilters } from './call-filters';
 import { CallTable } from './call-table';

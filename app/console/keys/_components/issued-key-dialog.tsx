@@ -5,7 +5,7 @@ import { CodeBlock } from '@/app/_components/code-block';
 import { CopyButton } from '@/app/_components/copy-button';
 import { Dialog } from '@/app/_components/dialog';
 import { Notice } from '@/app/_components/notice';
-import { firstCall } from './first-call';
+import { firstCall } from '@/app/console/_components/first-call';
 import type { IssuedKey } from './key';
 
 interface IssuedKeyDialogProps {

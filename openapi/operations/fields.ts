@@ -9,7 +9,9 @@ export const moment = (description: string, example: string) =>
   z.iso.datetime({ offset: true }).regex(/^[12]/).max(35).meta({ description, examples: [example] });
 
 /** A line of text that comes back as it was sent: no control characters, no half of a surrogate pair. */
-export const lineOfText = () => z.string().regex(/^[^\p{Cc}\p{Cs}]*$/u);
+const noControlCharacters = /^[^\p{Cc}\p{Cs}]*$/u;
+// The document's patterns are Unicode ones by definition; the generator would write the flag into the pattern.
+export const lineOfText = () => z.string().regex(noControlCharacters).openapi({ pattern: noControlCharacters.source });
 
 export const optionalDateTime = (description: string) => z.union([dateTime(description), z.null()]).meta({ description, examples: ['2027-01-01T00:00:00.000Z'] });
 

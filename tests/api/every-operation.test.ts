@@ -130,7 +130,7 @@ describe('every read with an ETag', () => {
         expect(answer.status, known).toBe(304);
         expect(answer.text).toBe('');
         expect(answer.headers.etag).toBe(tag);
-        expect(answer.headers.vary).toBe('Accept, Authorization, Cookie');
+        expect(answer.headers.vary).toContain('Accept, Authorization, Cookie');
       }
     });
 

@@ -1,3 +1,4 @@
+import { createHash } from 'node:crypto';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
 import { closeDatabase, database } from '@/db/connection';
 import { createOrganization, type TestOrganization } from '../support/accounts';
@@ -66,11 +67,11 @@ describe('signing in', () => {
     };
     const known: number[] = [];
     const unknown: number[] = [];
-    for (let round = 0; round < 7; round++) {
+    for (let round = 0; round < 5; round++) {
       known.push(await timed(organization.members.auditor.email));
       unknown.push(await timed(`stranger${round}@nowhere.example`));
     }
-    const median = (times: number[]) => times.toSorted((a, b) => a - b)[3]!;
+    const median = (times: number[]) => times.toSorted((a, b) => a - b)[2];
     const ratio = median(known) / median(unknown);
     expect(ratio).toBeGreaterThan(0.5);
     expect(ratio).toBeLessThan(2);
@@ -151,13 +152,24 @@ describe('a session', () => {
   });
 });
 
+/** Every try costs the server a tenth of a second on purpose, so most of them are put into the count directly. */
+async function countTries(limit: 'account' | 'address', name: string, points: number): Promise<void> {
+  await database()('sign_in_attempt').insert({ key: `${limit}:${name}`, points, expire: Date.now() + 900_000 });
+}
+
+async function triesCounted(limit: 'account' | 'address', name: string): Promise<number> {
+  return (await database()('sign_in_attempt').where({ key: `${limit}:${name}` }).first('points'))?.points ?? 0;
+}
+
+const accountName = (email: string) => createHash('sha256').update(email).digest('base64url');
+
 describe('tries at a password', () => {
   test('are ten for an account, from wherever they come and however many at a time; then even the right one waits', async () => {
     const { members } = await createOrganization();
-    const guesses = await Promise.all(Array.from({ length: 16 }, () => signIn(members.owner.email, 'a wrong password')));
+    const guesses = await Promise.all(Array.from({ length: 14 }, () => signIn(members.owner.email, 'a wrong password')));
     expect(guesses.filter(({ status }) => status === 401)).toHaveLength(10);
     const refused = guesses.filter(({ status }) => status === 429);
-    expect(refused).toHaveLength(6);
+    expect(refused).toHaveLength(4);
     const late = await signIn(members.owner.email, members.owner.password);
     expect(late.status).toBe(429);
     expect(late.body.code).toBe('too-many-attempts');
@@ -168,18 +180,23 @@ describe('tries at a password', () => {
 
   test('are given back by the right password', async () => {
     const { members } = await createOrganization();
+    await countTries('account', accountName(members.admin.email), 9);
     const from = freshAddress();
-    for (let round = 0; round < 2; round++) {
-      for (let wrong = 0; wrong < 8; wrong++) await signIn(members.admin.email, 'a wrong password', { from });
-      expect((await signIn(members.admin.email, members.admin.password, { from })).status).toBe(201);
-    }
+    await countTries('address', from, 20);
+    expect((await signIn(members.admin.email, members.admin.password, { from })).status).toBe(201);
+    expect(await triesCounted('account', accountName(members.admin.email))).toBe(0);
+    expect(await triesCounted('address', from)).toBe(20);
+    expect((await signIn(members.admin.email, 'a wrong password', { from })).status).toBe(401);
+    expect(await triesCounted('account', accountName(members.admin.email))).toBe(1);
+    expect(await triesCounted('address', from)).toBe(21);
   });
 
   test('are fifty from an address, over all accounts', async () => {
     const from = freshAddress();
-    const guesses = await Promise.all(Array.from({ length: 54 }, (_, index) => signIn(`guess${index}@nowhere.example`, 'a wrong password', { from })));
-    expect(guesses.filter(({ status }) => status === 401)).toHaveLength(50);
-    expect(guesses.filter(({ status }) => status === 429)).toHaveLength(4);
+    await countTries('address', from, 46);
+    const guesses = await Promise.all(Array.from({ length: 9 }, (_, index) => signIn(`guess${index}@nowhere.example`, 'a wrong password', { from })));
+    expect(guesses.filter(({ status }) => status === 401)).toHaveLength(4);
+    expect(guesses.filter(({ status }) => status === 429)).toHaveLength(5);
     const { email, password } = organization.members.owner;
     expect((await signIn(email, password, { from })).status).toBe(429);
     expect((await signIn(email, password)).status).toBe(201);
@@ -187,9 +204,10 @@ describe('tries at a password', () => {
 
   test('cannot be multiplied by claiming other addresses in X-Forwarded-For', async () => {
     const from = freshAddress();
+    await countTries('address', from, 48);
     const guesses = await Promise.all(
-      Array.from({ length: 52 }, (_, index) => signIn(`claim${index}@nowhere.example`, 'x', { from, headers: { 'X-Forwarded-For': `203.0.113.${index}` } })),
+      Array.from({ length: 5 }, (_, index) => signIn(`claim${index}@nowhere.example`, 'x', { from, headers: { 'X-Forwarded-For': `203.0.113.${index}` } })),
     );
-    expect(guesses.filter(({ status }) => status === 429)).toHaveLength(2);
+    expect(guesses.filter(({ status }) => status === 429)).toHaveLength(3);
   });
 });

@@ -2,7 +2,7 @@
  * The API as a client sees it. Every answer is held against the published document before a test gets it,
  * so that no test can pass on an answer that the document does not promise.
  */
-import { Agent, request, type Dispatcher } from 'undici';
+import { Agent, type Dispatcher } from 'undici';
 import { checkAnswer, type Answer } from './answer-check';
 
 export type { Answer } from './answer-check';
@@ -26,7 +26,7 @@ const dispatchers = new Map<string, Agent>();
 function dispatcherFrom(localAddress: string): Agent {
   let agent = dispatchers.get(localAddress);
   if (!agent) {
-    agent = new Agent({ connect: { localAddress }, connections: 32, pipelining: 1, keepAliveTimeout: 4000 });
+    agent = new Agent({ localAddress, connections: 32, pipelining: 1, keepAliveTimeout: 4000 });
     dispatchers.set(localAddress, agent);
   }
   return agent;
@@ -41,9 +41,11 @@ export function serverUrl(): string {
 /** `path` begins with /api. */
 export async function call(method: string, path: string, options: CallOptions = {}): Promise<Answer> {
   const { key, cookie, body, rawBody, headers, from = '127.0.0.1', server = serverUrl() } = options;
-  const url = new URL(server);
-  const response = await request({ origin: url.origin, path, method } as never, {
-    dispatcher: dispatcherFrom(from),
+  // The dispatcher sends the path as it stands; a URL object would have mended it first.
+  const response = await dispatcherFrom(from).request({
+    origin: server,
+    path,
+    method: method as Dispatcher.HttpMethod,
     headers: {
       ...(key !== undefined && { authorization: `Bearer ${key}` }),
       ...(cookie !== undefined && { cookie }),
@@ -51,7 +53,7 @@ export async function call(method: string, path: string, options: CallOptions = 
       ...headers,
     },
     body: rawBody ?? (body === undefined ? null : JSON.stringify(body)),
-  } as never);
+  });
   const text = await response.body.text();
   const answer: Answer = {
     status: response.statusCode,

@@ -30,10 +30,11 @@ export function oneUnitCall(key: string, options: CallOptions = {}) {
 
 export async function createWorld(options: Parameters<typeof createOrganization>[0] = {}): Promise<World> {
   const organization = await createOrganization(options);
-  const key = await createKey(organization);
+  const key = await createKey(organization, { monthly_unit_quota: Math.min(100_000, options.monthly_unit_quota ?? 100_000) });
   const cookies: Partial<Record<Role, string>> = {};
   for (const role of roles) cookies[role] = await sessionCookieOf(organization.members[role]);
   const answer = await oneUnitCall(key.secret);
+  if (answer.status !== 200) throw new Error(`the world's first call was answered ${answer.text}`);
   return { organization, key, cookies: cookies as Record<Role, string>, callId: answer.body.id };
 }
 
@@ -45,7 +46,7 @@ export interface PreparedCall {
 
 /** A request that the operation answers with success when the caller may make it. */
 export async function validRequest(operation: Operation, world: World): Promise<PreparedCall> {
-  const target = await createKey(world.organization);
+  const target = await createKey(world.organization, { monthly_unit_quota: 1 });
   const path = operation.path.replace(/\{(\w+)\}/g, (_, name: string) => parameterValue(name, world, target.id));
   const version = operation.conditional ? (await readKey(world.organization.id, target.id))!.version : undefined;
   return {

@@ -6,7 +6,7 @@ export default {
   reactStrictMode: true,
   // A path with a trailing slash is answered by our own 404 instead of a redirect.
   skipTrailingSlashRedirect: true,
-  // The console answers a missing permission with status 403 and app/forbidden.tsx.
+  // The console answers a missing permission with status 403 and app/console/forbidden.tsx.
   experimental: { authInterrupts: true },
   // Database drivers are loaded by Node as they are; bundling them breaks their optional requires.
   serverExternalPackages: ['knex', 'pg', 'rate-limiter-flexible'],

@@ -20,9 +20,9 @@ export async function PublicFrame({ signIn = true, children }: PublicFrameProps)
   return (
     <div className="mx-auto flex min-h-dvh max-w-page flex-col px-5 sm:px-7">
       <SkipLink />
-      <header className="flex flex-wrap items-baseline gap-x-7 gap-y-2 pt-5 pb-3">
+      <header className="flex flex-wrap items-baseline gap-x-7 gap-y-1.5 pt-5 pb-3">
         <Mark />
-        <nav aria-label="Site" className="flex flex-1 gap-[22px] text-ash">
+        <nav aria-label="Site" className="order-last flex w-full gap-[22px] text-ash sm:order-none sm:w-auto">
           <Link href="/reference" className="hover:text-ink">
             Reference
           </Link>
@@ -30,7 +30,7 @@ export async function PublicFrame({ signIn = true, children }: PublicFrameProps)
             Problems
           </Link>
         </nav>
-        <div className="flex items-baseline gap-5 text-small">
+        <div className="ml-auto flex items-baseline gap-5 text-small">
           <ThemeSwitch initial={theme} />
           {signIn && (
             <Link href="/sign-in" className="link">

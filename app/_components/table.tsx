@@ -28,7 +28,7 @@ export function HeaderCell({ numeric = false, className = '', ...rest }: Compone
     <th
       scope="col"
       {...rest}
-      className={`sticky top-0 z-[1] h-8 border-b border-rule bg-paper pr-4 text-fine font-[550] whitespace-nowrap text-ash last:pr-0 ${numeric ? 'text-right' : 'text-left'} ${className}`}
+      className={`sticky top-0 z-[1] h-8 border-b border-rule bg-paper pl-4 text-fine font-[550] whitespace-nowrap text-ash first:pl-0 ${numeric ? 'text-right' : 'text-left'} ${className}`}
     />
   );
 }
@@ -41,7 +41,7 @@ export function Cell({ numeric = false, mono = false, className = '', ...rest }:
   return (
     <td
       {...rest}
-      className={`h-row border-b border-rule pr-4 last:pr-0 ${numeric ? 'text-right whitespace-nowrap' : ''} ${numeric || mono ? 'font-mono text-[13px]' : ''} ${className}`}
+      className={`h-row border-b border-rule pl-4 first:pl-0 ${numeric ? 'text-right whitespace-nowrap' : ''} ${numeric || mono ? 'font-mono text-[13px]' : ''} ${className}`}
     />
   );
 }

@@ -20,7 +20,7 @@ export default function ProblemsPage() {
               <HeaderCell numeric className="w-14">
                 Status
               </HeaderCell>
-              <HeaderCell className="sm:pl-4">Problem</HeaderCell>
+              <HeaderCell>Problem</HeaderCell>
               <HeaderCell className="hidden sm:table-cell">Code</HeaderCell>
             </tr>
           </thead>
@@ -30,7 +30,7 @@ export default function ProblemsPage() {
                 <Cell numeric className="text-ash">
                   {status}
                 </Cell>
-                <Cell className="py-1.5 sm:pl-4">
+                <Cell className="py-1.5">
                   <Link href={`/problems/${slug}`} className="-outline-offset-2 after:absolute after:inset-0">
                     {title}
                   </Link>

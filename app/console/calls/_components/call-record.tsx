@@ -3,7 +3,7 @@
 import Link from 'next/link';
 import type { ReactNode } from 'react';
 import useSWR from 'swr';
-import { asProblem } from '@/app/_api/client';
+import { asProblem, type ProblemField } from '@/app/_api/client';
 import { ButtonLink } from '@/app/_components/button';
 import { CodeBlock } from '@/app/_components/code-block';
 import { CopyButton } from '@/app/_components/copy-button';
@@ -12,6 +12,8 @@ import { Figure, Figures } from '@/app/_components/figure';
 import { LoadingPair } from '@/app/_components/loading-pair';
 import { LocalTime } from '@/app/_components/local-time';
 import { PageTitle } from '@/app/_components/page-title';
+import { curlCommand } from '@/app/_format/curl';
+import { readableJson } from '@/app/_format/json';
 import { formatCount, formatMilliseconds } from '@/app/_format/numbers';
 import { isProblemSlug, problemKind } from '@/lib/problems/problems';
 import { callerOf, statusColour, type CallDetail } from './call';
@@ -32,16 +34,13 @@ export function CallRecord({ callId }: { readonly callId: string }) {
         <Figure label="Duration" value={formatMilliseconds(call.duration_ms)} unit="ms" />
         <Figure label="Time" value={<LocalTime iso={call.created_at} />} />
       </Figures>
-      {call.problem && <Refused code={call.problem} />}
+      {call.problem && <Refused code={call.problem} errors={errorsOf(call.answer)} />}
       <dl className="mb-7 grid gap-x-8 border-t border-rule pt-3 text-[14px] lg:grid-cols-2">
         <Entry label="Caller">{callerOf(call)}</Entry>
-        <Entry label="Engine">
-          <Mono>{call.engine}</Mono>
-        </Entry>
-        <Entry label="Address">{call.address ? <Mono>{call.address}</Mono> : 'not recorded'}</Entry>
         <Entry label="Request id" copy={call.request_id}>
           <Mono>{call.request_id}</Mono>
         </Entry>
+        <Entry label="Address">{call.address ? <Mono>{call.address}</Mono> : 'not recorded'}</Entry>
         <Entry label="Caller’s request id">{call.client_request_id ? <Mono>{call.client_request_id}</Mono> : 'none sent'}</Entry>
         <Entry label="Input digest" copy={call.digests.input}>
           {call.digests.input ? <Mono>{call.digests.input}</Mono> : 'none: the input was refused'}
@@ -49,25 +48,53 @@ export function CallRecord({ callId }: { readonly callId: string }) {
         <Entry label="Result digest" copy={call.digests.result}>
           {call.digests.result ? <Mono>{call.digests.result}</Mono> : 'none: there was no result'}
         </Entry>
+        <Entry label="Engine">
+          <Mono>{call.engine}</Mono>
+        </Entry>
       </dl>
       <div className="grid gap-8 lg:grid-cols-2">
         <Document title="Request" content={call.request} absent="The request body was not kept." />
         <Document title="Answer" content={call.answer} absent="The answer was not kept. The same request on the same engine computes it again, to the byte." />
       </div>
+      {isRecord(call.request) && (
+        <section className="mt-8">
+          <h2 className="mb-2 text-heading font-semibold">Make this call again</h2>
+          <CodeBlock code={curlCommand(window.location.origin, call.calculation, call.request)} label="command" />
+        </section>
+      )}
     </>
   );
 }
 
-function Refused({ code }: { readonly code: string }) {
+function isRecord(value: unknown): value is Record<string, unknown> {
+  return typeof value === 'object' && value !== null && !Array.isArray(value);
+}
+
+/** The wrong fields, where the refusal was kept and names any. */
+function errorsOf(answer: unknown): readonly ProblemField[] {
+  return isRecord(answer) && Array.isArray(answer.errors) ? (answer.errors as ProblemField[]) : [];
+}
+
+function Refused({ code, errors }: { readonly code: string; readonly errors: readonly ProblemField[] }) {
   if (!isProblemSlug(code)) return <p className="mb-6 font-mono text-small text-garnet">{code}</p>;
   const { title, remedy } = problemKind(code);
   return (
-    <p className="mb-6 max-w-measure border-l-[3px] border-garnet py-0.5 pl-3 text-small">
+    <div className="mb-6 max-w-measure border-l-[3px] border-garnet py-0.5 pl-3 text-small wrap-anywhere">
       <b className="font-semibold text-garnet">{title}.</b> {remedy}{' '}
       <Link href={`/problems/${code}`} className="link">
         More
       </Link>
-    </p>
+      {errors.length > 0 && (
+        <ul className="mt-1.5 grid gap-0.5">
+          {errors.map(({ pointer, parameter, detail }) => (
+            <li key={`${pointer ?? parameter} ${detail}`}>
+              {pointer && <code className="mr-2 font-mono text-[12.5px] text-ash">{pointer}</code>}
+              {detail}
+            </li>
+          ))}
+        </ul>
+      )}
+    </div>
   );
 }
 
@@ -75,7 +102,7 @@ function Document({ title, content, absent }: { readonly title: string; readonly
   return (
     <section className="min-w-0">
       <h2 className="mb-2 text-heading font-semibold">{title}</h2>
-      {content === null || content === undefined ? <p className="max-w-measure text-ash">{absent}</p> : <CodeBlock code={JSON.stringify(content, null, 2)} label={title.toLowerCase()} tall />}
+      {content === null || content === undefined ? <p className="max-w-measure text-ash">{absent}</p> : <CodeBlock code={readableJson(content)} label={title.toLowerCase()} tall />}
     </section>
   );
 }

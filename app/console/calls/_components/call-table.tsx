@@ -21,7 +21,7 @@ export function CallTable({ calls }: { readonly calls: readonly Call[] }) {
             <HeaderCell numeric className="hidden md:table-cell">
               ms
             </HeaderCell>
-            <HeaderCell className="hidden pl-4 lg:table-cell">Call</HeaderCell>
+            <HeaderCell className="hidden pl-6 lg:table-cell">Call</HeaderCell>
           </tr>
         </thead>
         <tbody>
@@ -50,7 +50,7 @@ export function CallTable({ calls }: { readonly calls: readonly Call[] }) {
               <Cell numeric className="hidden md:table-cell">
                 {formatMilliseconds(call.duration_ms)}
               </Cell>
-              <Cell mono className="hidden pl-4 whitespace-nowrap text-ash lg:table-cell">
+              <Cell mono className="hidden pl-6 whitespace-nowrap text-ash lg:table-cell">
                 {call.id}
               </Cell>
             </Row>

@@ -51,7 +51,7 @@ export function KeyTable({ keys, onOpen }: KeyTableProps) {
         cell: ({ row: { original: key } }) => (
           <span className="block">
             <span>{formatCount(key.units_used)}</span>
-            <span className="text-ash"> / {formatCount(key.monthly_unit_quota)}</span>
+            <span className="hidden text-ash sm:inline"> / {formatCount(key.monthly_unit_quota)}</span>
             <QuotaPair used={key.units_used} quota={key.monthly_unit_quota} className="mt-px mb-1 min-w-20" />
           </span>
         ),

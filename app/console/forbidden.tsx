@@ -1,6 +1,6 @@
 import type { Metadata } from 'next';
-import { PageTitle } from './_components/page-title';
-import { ButtonLink } from './_components/button';
+import { PageTitle } from '@/app/_components/page-title';
+import { ButtonLink } from '@/app/_components/button';
 
 export const metadata: Metadata = { title: 'Not for this role' };
 

@@ -34,7 +34,8 @@ export function serve(...tasks: Task[]): RouteHandlers {
 export function serveResolved(resolve: (parameters: RawParameters) => readonly Task[] | null): RouteHandlers {
   const answer: RouteHandler = async (request, { params }) => {
     const parameters = await params;
-    const tasks = resolve(parameters);
+    // The framework takes a path with a trailing slash for the same one.
+    const tasks = new URL(request.url).pathname.endsWith('/') ? null : resolve(parameters);
     if (tasks === null) return refuse(request, new Refusal('not-found', 'there is nothing at this path'));
     const method = request.method === 'HEAD' ? 'get' : request.method.toLowerCase();
     const task = tasks.find(({ operation }) => operation.method === method);

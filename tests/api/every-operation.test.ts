@@ -28,9 +28,9 @@ const parametersOf = (answer: Answer) => answer.body.errors.map(({ parameter }: 
 describe('every operation', () => {
   for (const operation of operations) {
     test(`${operation.id} refuses an unknown query parameter with 422 and names it`, async () => {
-      const answer = await ask(operation, { query: '?nonsense=1&constructor=2&__proto__=3' });
+      const answer = await ask(operation, { query: '?nonsense=1&constructor=2&toString=3' });
       expect(answer.status).toBe(422);
-      expect(parametersOf(answer).sort()).toEqual(['__proto__', 'constructor', 'nonsense']);
+      expect(parametersOf(answer).sort()).toEqual(['constructor', 'nonsense', 'toString']);
     });
 
     test(`${operation.id} refuses a query parameter given twice with 400`, async () => {

@@ -11,7 +11,7 @@ beforeAll(async () => {
 });
 afterAll(closeDatabase);
 
-const byPath = Map.groupBy(operations, ({ path }) => path);
+const byPath = new Map(operations.map(({ path }) => [path, operations.filter((operation) => operation.path === path)]));
 const everyMethod = ['GET', 'HEAD', 'POST', 'PUT', 'PATCH', 'DELETE', 'OPTIONS', 'TRACE', 'PROPFIND', 'LOCK', 'QUERY'];
 
 describe('a path', () => {
@@ -96,6 +96,29 @@ describe('an id', () => {
       expect(answer.body.code).toBe('not-found');
     });
   }
+});
+
+describe('a header by which the framework talks to itself', () => {
+  const fields: Record<string, string>[] = [
+    { RSC: '1' }, { RSC: '1', 'Next-Router-Prefetch': '1' }, { 'Next-Router-State-Tree': '%5B%22%22%5D' }, { 'Next-Action': '0' }, { 'X-Nextjs-Data': '1' },
+    { 'X-Matched-Path': '/api/v1/keys' }, { 'X-Middleware-Subrequest': 'middleware' }, { 'X-Middleware-Rewrite': '/api/v1/keys' }, { 'X-Invoke-Path': '/api/v1/keys' }, { 'X-Now-Route-Matches': 'method=x' },
+  ];
+  for (const headers of fields) {
+    test(`such as ${Object.keys(headers).join(' and ')} changes no answer`, async () => {
+      expect((await call('GET', '/api/v1/health', { headers })).status).toBe(200);
+      expect((await call('POST', oneUnitPath, { key: world.key.secret, body: oneUnitInput, headers })).status).toBe(200);
+      expect((await call('GET', '/api/v1/nothing', { headers })).status).toBe(404);
+      expect((await call('POST', oneUnitPath, { body: oneUnitInput, headers })).status).toBe(401);
+    });
+  }
+
+  test('and the query parameters it uses for that cannot exchange an id', async () => {
+    const { id } = (await call('GET', '/api/v1/methods')).body.data[0];
+    for (const prefix of ['nxtP', 'nxtI']) {
+      const answer = await call('GET', `/api/v1/methods/${id}?${prefix}method=no-such-method`);
+      expect(answer.status === 200 ? answer.body.id : answer.status).toBe(answer.status === 200 ? id : 422);
+    }
+  });
 });
 
 describe('a header that claims another method', () => {

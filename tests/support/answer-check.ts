@@ -40,7 +40,8 @@ function checkEveryAnswer(method: string, { status, headers, text, body }: Answe
   if (!/^no-(store|cache)$/.test(headers['cache-control'] ?? '')) breach('Cache-Control must be no-store or no-cache');
   for (const telltale of ['server', 'x-powered-by']) if (telltale in headers) breach(`${telltale} tells what runs here`);
   if (headers['access-control-allow-origin']) breach('no other site is served');
-  if (/\b(NaN|-?Infinity)\b/.test(text)) breach('NaN or Infinity stands in the text');
+  // A refusal may quote what was sent; an answer has no such word anywhere.
+  if (status < 400 && /\b(NaN|Infinity)\b/.test(text)) breach('NaN or Infinity stands in the text');
   if (status === 405 && !headers.allow) breach('405 needs Allow');
   if (status >= 400 && method !== 'HEAD') checkProblem(status, headers, text, body, breach);
 }

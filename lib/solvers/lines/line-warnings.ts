@@ -1,0 +1,26 @@
+/** What to know about a line's model over the frequencies asked for. */
+import type { Warning } from '../calculation';
+import type { Line } from './line';
+
+/** Skin effect changes R by about a factor of three over a decade, so constants over more are a choice worth naming. */
+const decade = 10;
+
+export function lineWarnings(line: Line, frequenciesHz: Float64Array, pointer = '/line'): Warning[] {
+  if (line.kind !== 'rlgc' || (line.resistance_ohm_per_m === 0 && line.conductance_s_per_m === 0)) return [];
+  const positive = frequenciesHz.filter((each) => each > 0);
+  if (positive.length === 0) return [];
+  let lowest = Infinity;
+  let highest = 0;
+  for (const each of positive) {
+    lowest = Math.min(lowest, each);
+    highest = Math.max(highest, each);
+  }
+  if (highest <= decade * lowest) return [];
+  return [
+    {
+      code: 'constants_over_decade',
+      pointer,
+      detail: `R and G are taken as constant from ${lowest} to ${highest} Hz; the resistance of a real conductor grows with the root of frequency, and dielectric loss with frequency`,
+    },
+  ];
+}

@@ -1,0 +1,17 @@
+/** A line given by its primary constants, taken as the same at every frequency. */
+import { z } from 'zod';
+import { constantConstants, defineLineKind } from './line-constants';
+
+export const rlgc = defineLineKind({
+  schema: z
+    .strictObject({
+      kind: z.literal('rlgc').meta({ title: 'Kind', description: 'Given by R, L, G and C.', examples: ['rlgc'] }),
+      resistance_ohm_per_m: z.number().min(0).max(1e9).meta({ title: 'Resistance', description: 'Series resistance of both conductors together.', examples: [0.12], 'x-unit': 'ohm/m' }),
+      inductance_h_per_m: z.number().min(0).max(1e3).meta({ title: 'Inductance', description: 'Series inductance of the loop.', examples: [2.5e-7], 'x-unit': 'H/m' }),
+      conductance_s_per_m: z.number().min(0).max(1e9).meta({ title: 'Conductance', description: 'Shunt conductance between the conductors.', examples: [2.5e-5], 'x-unit': 'S/m' }),
+      capacitance_f_per_m: z.number().min(0).max(1e3).meta({ title: 'Capacitance', description: 'Shunt capacitance between the conductors.', examples: [1e-10], 'x-unit': 'F/m' }),
+    })
+    .meta({ id: 'RlgcLine', title: 'R, L, G, C constants', description: 'A line given by its primary constants, the same at every frequency.' }),
+  constants: (line, { length }) =>
+    constantConstants(length, line.resistance_ohm_per_m, line.inductance_h_per_m, line.conductance_s_per_m, line.capacitance_f_per_m),
+});

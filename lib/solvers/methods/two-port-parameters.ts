@@ -1,0 +1,103 @@
+/**
+ * From the scaled matrix of a chain to what is asked of it. With A, B, C, D of the chain, Z1 and Z2 the reference impedances, R1 and R2
+ * their real parts, n = A Z2 + B + C Z1 Z2 + D Z1 (Frickey 1994, table I, in Kurokawa's power waves):
+ *
+ *   S11 = (A Z2 + B - C Z1* Z2 - D Z1*)/n     S12 = S21 = 2 sqrt(R1 R2)/n     S22 = (-A Z2* + B - C Z1 Z2* + D Z1)/n
+ *   Z = [A 1; 1 D]/C     Y = [D -1; -1 A]/B     group delay = -d(arg S21)/d omega = Im((dn/d omega)/n)
+ */
+import type { Method } from '../calculation';
+import { decibelsPerNeper } from '../constants';
+import type { Phasor, Space } from '../numeric/phasor';
+import { magnitudes } from '../numeric/phasor';
+import { timesPowerOfTwo } from '../numeric/power-of-two';
+import type { ComplexColumn } from '../numeric/complex-column';
+import type { TwoPort } from './two-port';
+
+export const twoPortConversion: Method = {
+  id: 'two-port-conversion',
+  title: 'Conversion between ABCD, S, Z, Y and T',
+  source: 'Frickey, Conversions between S, Z, Y, h, ABCD and T parameters, IEEE Trans. MTT-42 (1994) 205-211, with Marks and Williams, MTT-43 (1995) 914-915 on its waves (from memory, checked by nodal analysis)',
+  range: 'reference impedances with a positive real part; a representation that does not exist is null',
+  accuracy: 'exact; 1e-12 relative in float64',
+};
+
+/** How T is ordered, in words: two orders are in use. */
+export const tOrder = '[b1; a1] = T [a2; b2]' as const;
+
+export interface Scattering<T> {
+  readonly s11: T;
+  readonly s22: T;
+  /** 2 sqrt(R1 R2) factor / n; S21 is this times exp(-loss) and a power of two. */
+  readonly forward: T;
+  readonly denominator: T;
+  readonly denominatorSlope: T;
+}
+
+export function scattering<T extends Phasor<T>>(space: Space<T>, two: TwoPort<T>, z1: T, z2: T): Scattering<T> {
+  const { a, b, c, d, slope } = two;
+  const z1c = z1.conjugate();
+  const z2c = z2.conjugate();
+  const denominator = a.mul(z2).add(b).add(c.mul(z1).mul(z2)).add(d.mul(z1));
+  return {
+    s11: a.mul(z2).add(b).sub(c.mul(z1c).mul(z2)).sub(d.mul(z1c)).div(denominator),
+    s22: b.sub(a.mul(z2c)).sub(c.mul(z1).mul(z2c)).add(d.mul(z1)).div(denominator),
+    forward: two.factor.mul(twiceRootOfResistances(space, z1, z2)).div(denominator),
+    denominator,
+    denominatorSlope: slope.a.mul(z2).add(slope.b).add(slope.c.mul(z1).mul(z2)).add(slope.d.mul(z1)),
+  };
+}
+
+/** [b1; a1] = T [a2; b2], without the scale. */
+export function transferScattering<T extends Phasor<T>>(space: Space<T>, { a, b, c, d }: TwoPort<T>, z1: T, z2: T) {
+  const z1c = z1.conjugate();
+  const z2c = z2.conjugate();
+  const root = twiceRootOfResistances(space, z1, z2);
+  return {
+    t11: a.mul(z2c).sub(b).sub(c.mul(z1c).mul(z2c)).add(d.mul(z1c)).div(root),
+    t12: a.mul(z2).add(b).sub(c.mul(z1c).mul(z2)).sub(d.mul(z1c)).div(root),
+    t21: a.mul(z2c).sub(b).add(c.mul(z1).mul(z2c)).sub(d.mul(z1)).div(root),
+    t22: a.mul(z2).add(b).add(c.mul(z1).mul(z2)).add(d.mul(z1)).div(root),
+  };
+}
+
+function twiceRootOfResistances<T extends Phasor<T>>(space: Space<T>, z1: T, z2: T): T {
+  const first = space.column(z1).re;
+  const second = space.column(z2).re;
+  return space.from(first.map((each, index) => 2 * Math.sqrt(each) * Math.sqrt(second[index])), new Float64Array(space.length));
+}
+
+/** Multiplies by the scale of the matrix: what was formed with `factor` gains exp(-loss) 2^exponent. */
+export function withScale<T>({ lossNp, exponent }: TwoPort<T>, column: ComplexColumn): { re: Float64Array; im: Float64Array } {
+  return scaled(column, lossNp.map((each) => -each), exponent);
+}
+
+/** Divides by the scale of the matrix, of which `factor` is done already; infinite where it overflows. */
+export function withoutScale<T>({ lossNp, exponent }: TwoPort<T>, column: ComplexColumn): { re: Float64Array; im: Float64Array } {
+  return scaled(column, lossNp, exponent.map((each) => -each));
+}
+
+/** Times exp(nepers) 2^exponent, the exponential split so that it cannot overflow before the power of two is at work. */
+function scaled({ re, im }: ComplexColumn, nepers: Float64Array, exponent: Float64Array): { re: Float64Array; im: Float64Array } {
+  const apply = (values: Float64Array) =>
+    values.map((value, index) => {
+      const whole = Math.round(nepers[index] / Math.LN2);
+      return timesPowerOfTwo(value * Math.exp(nepers[index] - whole * Math.LN2), whole + exponent[index]);
+    });
+  return { re: apply(re), im: apply(im) };
+}
+
+/** -20 log10 |S21|, also where S21 itself is too small for a number. */
+export function insertionLossDb<T extends Phasor<T>>(space: Space<T>, { lossNp, exponent }: TwoPort<T>, { forward }: Scattering<T>): Float64Array {
+  return magnitudes(space, forward).map((each, index) => decibelsPerNeper * (lossNp[index] - Math.log(each) - exponent[index] * Math.LN2) + 0);
+}
+
+/** Largest singular value of S, squared, at one frequency: the share of incoming power that can come back out. */
+export function largestGain(s11: readonly [number, number], s21: readonly [number, number], s22: readonly [number, number]): number {
+  const power = ([re, im]: readonly [number, number]) => re * re + im * im;
+  const h11 = power(s11) + power(s21);
+  const h22 = power(s21) + power(s22);
+  // S^H S off the diagonal: conj(S11) S12 + conj(S21) S22, with S12 = S21.
+  const re = s11[0] * s21[0] + s11[1] * s21[1] + s21[0] * s22[0] + s21[1] * s22[1];
+  const im = s11[0] * s21[1] - s11[1] * s21[0] + s21[0] * s22[1] - s21[1] * s22[0];
+  return 0.5 * (h11 + h22 + Math.hypot(h11 - h22, 2 * Math.hypot(re, im)));
+}

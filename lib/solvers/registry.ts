@@ -1,0 +1,18 @@
+/** Every calculation of the service. This list is the only place that knows them all. */
+import type { Calculation, Method } from './calculation';
+import { secondaryConstants } from './calculations/lines/secondary-constants';
+import { cascade } from './calculations/networks/cascade';
+import { inputImpedance } from './calculations/terminations/input-impedance';
+
+export const calculations: readonly Calculation[] = [secondaryConstants, inputImpedance, cascade];
+
+export function findCalculation(group: string, id: string): Calculation | undefined {
+  return calculations.find((calculation) => calculation.group === group && calculation.id === id);
+}
+
+/** Every method that some calculation rests on, once. */
+export const methods: readonly Method[] = [...new Map(calculations.flatMap((calculation) => calculation.methods).map((method) => [method.id, method])).values()];
+
+export function findMethod(id: string): Method | undefined {
+  return methods.find((method) => method.id === id);
+}

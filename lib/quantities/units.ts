@@ -55,14 +55,14 @@ const named: Readonly<Record<string, NamedUnit>> = {
 
 /** Other spellings. The two omegas look alike and are two characters; so are the two signs for micro. */
 const spellings: Readonly<Record<string, string>> = {
-  'Ω': 'ohm', 'Ω': 'ohm', ohms: 'ohm', Ohm: 'ohm', inch: 'in', inches: 'in', '"': 'in', '″': 'in', "'": 'ft', '′': 'ft',
+  '\u03a9': 'ohm', '\u2126': 'ohm', ohms: 'ohm', Ohm: 'ohm', inch: 'in', inches: 'in', '"': 'in', '″': 'in', "'": 'ft', '′': 'ft',
   foot: 'ft', feet: 'ft', yard: 'yd', yards: 'yd', mile: 'mi', miles: 'mi', mils: 'mil', thou: 'mil', meter: 'm', metre: 'm', meters: 'm', metres: 'm',
   sec: 's', siemens: 'S', mho: 'S', henry: 'H', farad: 'F', volt: 'V', volts: 'V', watt: 'W', watts: 'W', '°': 'deg', degree: 'deg', degrees: 'deg',
   '°C': 'degC', celsius: 'degC', turns: 'turn', twist: 'turn', twists: 'turn', Neper: 'Np', neper: 'Np', percent: '%',
 };
 
 export const prefixes: Readonly<Record<string, number>> = {
-  E: 18, P: 15, T: 12, G: 9, M: 6, k: 3, '': 0, c: -2, m: -3, u: -6, µ: -6, μ: -6, n: -9, p: -12, f: -15, a: -18,
+  E: 18, P: 15, T: 12, G: 9, M: 6, k: 3, '': 0, c: -2, m: -3, u: -6, '\u00b5': -6, '\u03bc': -6, n: -9, p: -12, f: -15, a: -18,
 };
 
 /** A single symbol such as "mm", "MHz" or "°", or undefined. Whole names win over prefix and name: "mil" is no milli-il. */

@@ -17,6 +17,8 @@ export function shownUnit(size: number, unit: string): string {
   if (size === 0 || !Number.isFinite(size) || unit === 'm/s' || /[·*\s]/.test(unit) || !symbolUnit(first)?.prefixable) return unit;
   const exponent = Math.floor(Math.log10(Math.abs(size)) + 1e-12);
   const prefix = engineeringPrefixes.find((candidate) => prefixes[candidate] <= exponent) ?? 'a';
+  // From a tenth up the unit itself reads best: 0.12 ohm/m, 0.5 m.
+  if (prefix === 'm' && exponent === -1) return unit;
   // Lengths between a metre and ten kilometres read best in metres; nobody measures cable in 0.12 km.
   if (first === 'm' && prefix === 'k' && exponent < 4) return unit;
   return prefix + unit;

@@ -119,7 +119,8 @@ describe('a number on the wire and the text in the field are the same', () => {
   it.each([
     [2.5e-7, 'H/m', 'nH/m', '250'],
     [1e8, 'Hz', 'MHz', '100'],
-    [0.12, 'ohm/m', 'mohm/m', '120'],
+    [0.12, 'ohm/m', 'ohm/m', '0.12'],
+    [0.012, 'ohm/m', 'mohm/m', '12'],
     [3.2, 'm', 'm', '3.2'],
     [1500, 'm', 'm', '1500'],
     [0.00081, 'm', 'µm', '810'],

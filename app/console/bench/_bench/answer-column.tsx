@@ -1,0 +1,51 @@
+'use client';
+
+import { FailureNotice } from '@/app/_components/failure-notice';
+import { LoadingPair } from '@/app/_components/loading-pair';
+import type { Calculation } from '@/lib/solvers/calculation';
+import { AnswerView } from '../_answer/answer-view';
+import { SnippetTabs } from '../_snippet/snippet-tabs';
+import { BeforeFirstRun } from './before-first-run';
+import { CopyLink } from './copy-link';
+import type { Call } from './use-call';
+
+interface AnswerColumnProps {
+  readonly calculation: Calculation;
+  readonly path: string;
+  readonly call: Call;
+  /** What the form would send now; undefined while it cannot. */
+  readonly current: unknown;
+  readonly onRetry: () => void;
+}
+
+/** Right of the form, below it on a phone: the answer with everything that makes it usable elsewhere. */
+export function AnswerColumn({ calculation, path, call, current, onRetry }: AnswerColumnProps) {
+  const { state, answered, error } = call;
+  const waiting = state === 'waiting';
+  const stale = answered !== null && !waiting && current !== undefined && JSON.stringify(current) !== JSON.stringify(answered.input);
+  const outdated = answered !== null && (stale || state === 'refused' || current === undefined);
+  const shown = answered?.input ?? current;
+  return (
+    <section aria-label="Answer" aria-busy={waiting} className="min-w-0 space-y-7 lg:pt-1">
+      {waiting && <LoadingPair label="Calculating" />}
+      {state === 'refused' && <FailureNotice error={error} onRetry={onRetry} />}
+      {outdated && !waiting && (
+        <p role="status" className="text-small text-ash">
+          The form has changed since. The answer below is to the input before; <b className="font-[550] text-ink">Calculate</b> brings it up to date.
+        </p>
+      )}
+      {!answered && !waiting && state !== 'refused' && <BeforeFirstRun calculation={calculation} />}
+      {answered && (
+        <div className={outdated || waiting ? 'opacity-60 transition-opacity' : 'transition-opacity'}>
+          <AnswerView calculation={calculation} answer={answered.answer} />
+        </div>
+      )}
+      {shown !== undefined && (
+        <div className="space-y-4">
+          <SnippetTabs path={path} input={shown} />
+          <CopyLink input={shown} />
+        </div>
+      )}
+    </section>
+  );
+}

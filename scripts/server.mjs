@@ -56,9 +56,11 @@ function setRight(request) {
   }
   if (!trustsProxy && request.socket.remoteAddress) headers['x-forwarded-for'] = request.socket.remoteAddress;
 
-  const isApi = /^\/+api(\/|\?|$)/i.test(request.url);
+  // A request line may hold the whole URL; whose name it gives is no matter here.
+  request.url = request.url.replace(/^https?:\/\/[^/?#]*(?=[/?#]|$)/i, '') || '/';
+  const isApi = isUnderApi(request.url);
   // A path that no page can have is led to where every unknown path is answered: 404, in the shape of its place.
-  if (!isReadable(request.url)) request.url = isApi ? '/api/unreadable-path' : '/unreadable-path';
+  if (!isReadable(request.url, isApi)) request.url = isApi ? '/api/unreadable-path' : '/unreadable-path';
   // The framework answers an unknown method with an empty 500; the API's own routes know what is allowed.
   if (isApi && !frameworkMethods.has(request.method)) {
     headers['x-linewright-method'] = request.method;
@@ -66,10 +68,21 @@ function setRight(request) {
   }
 }
 
+/** Judged as the framework will see it, with its dots resolved. */
+function isUnderApi(url) {
+  try {
+    return /^\/+api(\/|$)/.test(new URL(url.replace(/^\/+/, '/'), 'http://linewright').pathname);
+  } catch {
+    return false;
+  }
+}
+
 /** Whether the framework's URL handling can read this at all, and reads in it what we do. */
-function isReadable(url) {
-  const [path] = url.split('?', 1);
+function isReadable(url, isApi) {
+  const [path] = url.split(/[?#]/, 1);
   if (!path.startsWith('/') || path.includes('//') || path.includes('\\')) return false;
+  // The framework takes `/x/` for `/x`; the API has one name for each thing.
+  if (isApi && path.endsWith('/')) return false;
   try {
     return !/[\u0000-\u001f\u007f]/.test(decodeURIComponent(path));
   } catch {

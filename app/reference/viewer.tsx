@@ -23,6 +23,7 @@ const configuration: ComponentProps<typeof ApiReferenceReact>['configuration'] =
   persistAuth: false,
   documentDownloadType: 'json',
   defaultHttpClient: { targetKey: 'shell', clientKey: 'curl' },
+  hiddenClients: ['c', 'clojure', 'csharp', 'dart', 'fsharp', 'go', 'http', 'java', 'julia', 'kotlin', 'objc', 'ocaml', 'php', 'powershell', 'r', 'ruby', 'rust', 'swift'],
 };
 
 export default function Viewer() {

@@ -1,0 +1,231 @@
+/** What holds for every line, termination and cascade, whatever its numbers. */
+import fc from 'fast-check';
+import { describe, expect, it } from 'vitest';
+import { findCalculation } from '@/lib/solvers/registry';
+import { ImpossibleInput } from '@/lib/solvers/errors';
+
+type Column = (number | null)[];
+interface ComplexColumn {
+  re: Column;
+  im: Column;
+}
+
+const seed = 20261201;
+const run = (property: fc.IProperty<never> | fc.IProperty<[never]> | object, runs = 300) => fc.assert(property as fc.IProperty<unknown>, { seed, numRuns: runs });
+
+// The results are read by name here; their shapes are held by the declarations' own test.
+function solve(group: string, id: string, input: object): any {
+  const calculation = findCalculation(group, id)!;
+  return calculation.solve(calculation.input.parse(input)).result;
+}
+const secondary = (input: object) => solve('lines', 'secondary-constants', input);
+const terminated = (input: object) => solve('terminations', 'input-impedance', input);
+const cascaded = (input: object) => solve('networks', 'cascade', input);
+
+const decades = (low: number, high: number) => fc.double({ min: low, max: high, noNaN: true }).map((exponent) => 10 ** exponent);
+const orNone = (value: fc.Arbitrary<number>) => fc.oneof({ weight: 4, arbitrary: value }, { weight: 1, arbitrary: fc.constant(0) });
+const rlgc = fc.record({
+  kind: fc.constant('rlgc'),
+  resistance_ohm_per_m: orNone(decades(-6, 3)),
+  inductance_h_per_m: decades(-8, -5),
+  conductance_s_per_m: orNone(decades(-10, -2)),
+  capacitance_f_per_m: decades(-12, -9),
+});
+const lossless = fc.record({ kind: fc.constant('lossless'), characteristic_impedance_ohm: decades(0, 3), velocity_factor: fc.double({ min: 0.1, max: 1, noNaN: true }) });
+const line = fc.oneof(rlgc, lossless);
+const frequency = decades(3, 9);
+const length = decades(-4, 1);
+const part = fc.record({ resistance_ohm: decades(-2, 4), inductance_h: decades(-12, -6), capacitance_f: decades(-15, -8) }, { requiredKeys: [] }).filter((each) => Object.keys(each).length > 0);
+const element = fc.oneof(
+  fc.record({ kind: fc.constant('line'), line, length_m: length }),
+  fc.record({ kind: fc.constantFrom('open_stub', 'short_stub'), line, length_m: length }),
+  fc.tuple(fc.constantFrom('series', 'shunt'), fc.constantFrom('series', 'parallel'), part).map(([kind, connection, parts]) => ({ kind, connection, ...parts })),
+  fc.record({ kind: fc.constant('transformer'), turns_ratio: decades(-1, 1) }),
+);
+const elements = fc.array(element, { minLength: 1, maxLength: 6 });
+
+const value = (column: ComplexColumn, index = 0) => ({ re: column.re[index]!, im: column.im[index]! });
+const size = ({ re, im }: { re: number; im: number }) => Math.hypot(re, im);
+const apart = (x: { re: number; im: number }, y: { re: number; im: number }) => Math.hypot(x.re - y.re, x.im - y.im);
+
+describe('a line', () => {
+  it('has Re gamma >= 0 and Re Zc >= 0, and gamma Zc = Z, gamma / Zc = Y', () => {
+    run(
+      fc.property(rlgc, frequency, (given, f) => {
+        const { propagation_constant_per_m, characteristic_impedance_ohm } = secondary({ line: given, frequency_hz: f });
+        const gamma = value(propagation_constant_per_m);
+        const zc = value(characteristic_impedance_ohm);
+        expect(gamma.re).toBeGreaterThanOrEqual(0);
+        expect(zc.re).toBeGreaterThanOrEqual(0);
+        const w = 2 * Math.PI * f;
+        const z = { re: given.resistance_ohm_per_m, im: w * given.inductance_h_per_m };
+        const y = { re: given.conductance_s_per_m, im: w * given.capacitance_f_per_m };
+        const product = { re: gamma.re * zc.re - gamma.im * zc.im, im: gamma.re * zc.im + gamma.im * zc.re };
+        const quotient = { re: (gamma.re * zc.re + gamma.im * zc.im) / size(zc) ** 2, im: (gamma.im * zc.re - gamma.re * zc.im) / size(zc) ** 2 };
+        expect(apart(product, z)).toBeLessThanOrEqual(1e-14 * size(z));
+        expect(apart(quotient, y)).toBeLessThanOrEqual(1e-14 * size(y));
+      }),
+    );
+  });
+
+  it('does not disperse where R/L = G/C', () => {
+    run(
+      fc.property(decades(-3, 2), decades(-8, -5), decades(-12, -9), frequency, (R, L, C, f) => {
+        const given = { kind: 'rlgc', resistance_ohm_per_m: R, inductance_h_per_m: L, conductance_s_per_m: (R * C) / L, capacitance_f_per_m: C };
+        const result = secondary({ line: given, frequency_hz: [f, 3 * f] });
+        expect(result.attenuation_np_per_m[0] / (R * Math.sqrt(C / L))).toBeCloseTo(1, 11);
+        expect(result.phase_velocity_m_per_s[0] * Math.sqrt(L * C)).toBeCloseTo(1, 11);
+        expect(result.group_velocity_m_per_s[1] * Math.sqrt(L * C)).toBeCloseTo(1, 11);
+      }),
+    );
+  });
+
+  it('scales: k times the constants over a k-th of the length is the same line', () => {
+    run(
+      fc.property(rlgc, frequency, length, decades(-2, 2), (given, f, l, k) => {
+        const scaled = {
+          kind: 'rlgc',
+          resistance_ohm_per_m: given.resistance_ohm_per_m * k,
+          inductance_h_per_m: given.inductance_h_per_m * k,
+          conductance_s_per_m: given.conductance_s_per_m * k,
+          capacitance_f_per_m: given.capacitance_f_per_m * k,
+        };
+        const one = terminated({ line: given, length_m: l, termination: { re: 30, im: 12 }, frequency_hz: f });
+        const other = terminated({ line: scaled, length_m: l / k, termination: { re: 30, im: 12 }, frequency_hz: f });
+        const turns = secondary({ line: given, frequency_hz: f }).phase_constant_rad_per_m[0] * l;
+        expect(apart(value(one.reflection_at_reference), value(other.reflection_at_reference))).toBeLessThanOrEqual(1e-13 * (1 + turns));
+      }),
+    );
+  });
+
+  it('comes to direct current without a step', () => {
+    run(
+      fc.property(rlgc, length, (given, l) => {
+        const result = terminated({ line: given, length_m: l, termination: 75, frequency_hz: [0, 1e-9] });
+        expect(apart(value(result.reflection_at_reference, 0), value(result.reflection_at_reference, 1))).toBeLessThanOrEqual(1e-10);
+      }),
+    );
+  });
+});
+
+describe('a terminated line', () => {
+  it('reflects no more than it is given, and gives the same at one point as in a sweep', () => {
+    run(
+      fc.property(line, length, frequency, fc.oneof(fc.constantFrom('open', 'short', 'matched'), part.map((each) => ({ kind: 'series_rlc', ...each })), part.map((each) => ({ kind: 'parallel_rlc', ...each }))), (given, l, f, termination) => {
+        const one = terminated({ line: given, length_m: l, termination, frequency_hz: f });
+        const sweep = terminated({ line: given, length_m: l, termination, frequency_hz: [f, f] });
+        const gamma = value(one.reflection_at_reference);
+        expect(size(gamma)).toBeLessThanOrEqual(1 + 1e-12);
+        for (const index of [0, 1]) expect(apart(gamma, value(sweep.reflection_at_reference, index))).toBeLessThanOrEqual(1e-13);
+        if (one.input_impedance_ohm.re[0] !== null && sweep.input_impedance_ohm.re[0] !== null) {
+          const zin = value(one.input_impedance_ohm);
+          // Beside a pole a difference of rounding is magnified by the impedance itself.
+          expect(apart(zin, value(sweep.input_impedance_ohm))).toBeLessThanOrEqual(1e-13 * size(zin) * (1 + size(zin)));
+        }
+      }),
+    );
+  });
+});
+
+describe('a cascade', () => {
+  it('of two parts is the whole, and is reciprocal and passive', () => {
+    run(
+      fc.property(line, length, frequency, fc.double({ min: 0.05, max: 0.95, noNaN: true }), (given, l, f, share) => {
+        const whole = cascaded({ elements: [{ kind: 'line', line: given, length_m: l }], frequency_hz: f });
+        const halves = cascaded({ elements: [{ kind: 'line', line: given, length_m: l * share }, { kind: 'line', line: given, length_m: l - l * share }], frequency_hz: f });
+        const turns = secondary({ line: given, frequency_hz: f }).phase_constant_rad_per_m[0] * l;
+        for (const name of ['s11', 's21', 's22']) expect(apart(value(whole.s[name]), value(halves.s[name]))).toBeLessThanOrEqual(1e-14 * (10 + turns));
+        expect(whole.passive && whole.reciprocal && halves.passive).toBe(true);
+        if (whole.group_delay_s[0] !== null) expect(halves.group_delay_s[0] / whole.group_delay_s[0]).toBeCloseTo(1, 9);
+      }),
+    );
+  });
+
+  it('passes no more power than it is given, at one point as in a sweep', () => {
+    run(
+      fc.property(elements, frequency, (chain, f) => {
+        const one = cascaded({ elements: chain, frequency_hz: f });
+        const sweep = cascaded({ elements: chain, frequency_hz: [f, f] });
+        const s11 = value(one.s.s11);
+        const s21 = value(one.s.s21);
+        expect(size(s11) ** 2 + size(s21) ** 2).toBeLessThanOrEqual(1 + 1e-10);
+        expect(one.passive).toBe(true);
+        expect(apart(s11, value(sweep.s.s11))).toBeLessThanOrEqual(1e-12);
+        expect(apart(s21, value(sweep.s.s21))).toBeLessThanOrEqual(1e-12);
+      }),
+    );
+  });
+
+  it('without loss passes what it does not reflect', () => {
+    run(
+      fc.property(fc.array(fc.record({ kind: fc.constantFrom('line', 'open_stub', 'short_stub'), line: lossless, length_m: length }), { minLength: 1, maxLength: 5 }), frequency, (chain, f) => {
+        const { s } = cascaded({ elements: chain, frequency_hz: f });
+        expect(size(value(s.s11)) ** 2 + size(value(s.s21)) ** 2).toBeCloseTo(1, 10);
+      }),
+    );
+  });
+
+  it('has det ABCD = 1, and Z and Y that are inverse to each other', () => {
+    run(
+      fc.property(fc.array(fc.record({ kind: fc.constant('line'), line: rlgc, length_m: decades(-2, 0) }), { minLength: 1, maxLength: 3 }), decades(6, 8), (chain, f) => {
+        const { abcd, z, y } = cascaded({ elements: chain, frequency_hz: f, include: ['abcd', 'z', 'y'] });
+        if (abcd.a.re[0] === null || z.z11.re[0] === null || y.y11.re[0] === null) return;
+        const times = (p: ComplexColumn, q: ComplexColumn) => ({ re: p.re[0]! * q.re[0]! - p.im[0]! * q.im[0]!, im: p.re[0]! * q.im[0]! + p.im[0]! * q.re[0]! });
+        const ad = times(abcd.a, abcd.d);
+        const bc = times(abcd.b, abcd.c);
+        expect(apart({ re: ad.re - bc.re, im: ad.im - bc.im }, { re: 1, im: 0 })).toBeLessThanOrEqual(1e-13 * (1 + size(ad)));
+        const first = times(z.z11, y.y11);
+        const second = times(z.z12, y.y21);
+        expect(apart({ re: first.re + second.re, im: first.im + second.im }, { re: 1, im: 0 })).toBeLessThanOrEqual(1e-12 * (1 + size(first)));
+      }),
+    );
+  });
+});
+
+describe('every accepted input', () => {
+  const extreme = (high: number) => fc.oneof(fc.constantFrom(0, Number.MIN_VALUE, 1e-300, 1e-30, high), fc.double({ min: 0, max: high, noNaN: true }));
+  const anyLine = fc.oneof(
+    fc.record({ kind: fc.constant('rlgc'), resistance_ohm_per_m: extreme(1e9), inductance_h_per_m: extreme(1e3), conductance_s_per_m: extreme(1e9), capacitance_f_per_m: extreme(1e3) }),
+    fc.record({ kind: fc.constant('lossless'), characteristic_impedance_ohm: fc.constantFrom(1e-3, 50, 1e6), velocity_factor: fc.constantFrom(1e-3, 1) }),
+  );
+  const anyComplex = fc.oneof(fc.constantFrom(0, 50, -1e12, 1e12), fc.record({ re: fc.constantFrom(-1e12, -50, 0, 1e-12, 50, 1e12), im: fc.constantFrom(-1e12, -3, 0, 3, 1e12) }), fc.record({ magnitude: extreme(1e12), angle_deg: fc.constantFrom(-360, -90, 0, 33, 180) }));
+  const anyParts = fc.record({ resistance_ohm: extreme(1e12), inductance_h: extreme(1e3), capacitance_f: extreme(1e3) }, { requiredKeys: [] });
+  const anyReference = fc.oneof(fc.constantFrom(1e-12, 50, 1e12), fc.record({ re: fc.constantFrom(1e-12, 50, 1e12), im: fc.constantFrom(-1e12, 0, 1e12) }));
+  const anyFrequencies = fc.array(extreme(1e15), { minLength: 1, maxLength: 3 });
+  const anyLength = extreme(1e9);
+  const anyElement = fc.oneof(
+    fc.record({ kind: fc.constantFrom('line', 'open_stub', 'short_stub'), line: anyLine, length_m: anyLength }),
+    fc.tuple(fc.constantFrom('series', 'shunt'), fc.constantFrom('series', 'parallel'), anyParts).map(([kind, connection, parts]) => ({ kind, connection, ...parts })),
+    fc.record({ kind: fc.constantFrom('series', 'shunt'), impedance_ohm: anyComplex }),
+    fc.record({ kind: fc.constant('transformer'), turns_ratio: fc.constantFrom(1e-6, 1, 1e6) }),
+  );
+
+  /** JSON has no NaN and no infinity; a warning stands for each null. */
+  function holdsOnlyFiniteNumbers(group: string, id: string, input: object): void {
+    const calculation = findCalculation(group, id)!;
+    try {
+      const { result, warnings } = calculation.solve(calculation.input.parse(input));
+      const parsed = calculation.output.safeParse(result);
+      expect(parsed.error?.issues, JSON.stringify(input)).toBeUndefined();
+      if (JSON.stringify(result).includes('null')) expect(warnings.length).toBeGreaterThan(0);
+    } catch (error) {
+      if (!(error instanceof ImpossibleInput)) throw error;
+    }
+  }
+
+  it('gives finite numbers or null with a warning, over the whole of its bounds', () => {
+    run(fc.property(anyLine, anyFrequencies, (given, f) => holdsOnlyFiniteNumbers('lines', 'secondary-constants', { line: given, frequency_hz: f })), 3000);
+    run(
+      fc.property(anyLine, anyLength, fc.oneof(anyComplex, fc.constantFrom('open', 'short', 'matched'), anyParts.map((parts) => ({ kind: 'series_rlc', ...parts })), anyParts.map((parts) => ({ kind: 'parallel_rlc', ...parts }))), anyFrequencies, anyReference, (given, l, termination, f, reference) =>
+        holdsOnlyFiniteNumbers('terminations', 'input-impedance', { line: given, length_m: l, termination, frequency_hz: f, reference_impedance_ohm: reference }),
+      ),
+      3000,
+    );
+    run(
+      fc.property(fc.array(anyElement, { minLength: 1, maxLength: 5 }), anyFrequencies, anyReference, (chain, f, reference) =>
+        holdsOnlyFiniteNumbers('networks', 'cascade', { elements: chain, frequency_hz: f, reference_impedance_ohm: reference, include: ['abcd', 's', 'z', 'y', 't'] }),
+      ),
+      3000,
+    );
+  });
+});

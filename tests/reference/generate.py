@@ -1,0 +1,354 @@
+"""Reference values for lines, terminations and cascades, to 30 digits.
+
+Made by other routes than the solvers': a length of line is the matrix exponential of the telegrapher equations
+d/dz [V; I] = -[0 Z; Y 0] [V; I] (no square root, no hyperbolic function, no characteristic impedance), and a cascade is
+solved by nodal analysis of the whole circuit, driven from each port in turn. Inputs are taken as the exact values of
+their float64 numbers. Writes telegrapher.json beside this file, or, with --check, says whether it is up to date.
+
+Needs mpmath (Debian: python3-mpmath).
+"""
+
+import json
+import pathlib
+import sys
+
+import mpmath as mp
+
+mp.mp.dps = 130
+TARGET = pathlib.Path(__file__).with_name("telegrapher.json")
+LIGHT = mp.mpf(299792458)
+J = mp.mpc(0, 1)
+
+
+def exact(number):
+    return mp.mpf(float(number)) if not isinstance(number, str) else mp.mpf(number)
+
+
+def complex_of(value):
+    if isinstance(value, dict):
+        return mp.mpc(exact(value["re"]), exact(value["im"]))
+    return mp.mpc(exact(value))
+
+
+def constants(line):
+    if line["kind"] == "lossless":
+        z0 = exact(line["characteristic_impedance_ohm"])
+        v = exact(line["velocity_factor"]) * LIGHT
+        return mp.mpf(0), z0 / v, mp.mpf(0), 1 / (z0 * v)
+    return tuple(exact(line[name]) for name in ("resistance_ohm_per_m", "inductance_h_per_m", "conductance_s_per_m", "capacitance_f_per_m"))
+
+
+def per_metre(line, omega):
+    r, l, g, c = constants(line)
+    return r + J * omega * l, g + J * omega * c
+
+
+def abcd_of_line(line, length, omega):
+    """exp of the telegrapher matrix by squaring a Taylor series."""
+    z, y = per_metre(line, omega)
+    length = exact(length)
+    matrix = mp.matrix([[0, z * length], [y * length, 0]])
+    size = max(abs(z * length), abs(y * length), abs(mp.sqrt(abs(z * y)) * length))
+    squarings = max(0, int(mp.ceil(mp.log(size + 1, 2))) + 8)
+    small = matrix / mp.mpf(2) ** squarings
+    term = mp.eye(2)
+    total = mp.eye(2)
+    for k in range(1, 60):
+        term = term * small / k
+        total += term
+    for _ in range(squarings):
+        total = total * total
+    return total
+
+
+def parts_impedance(parts, connection, omega):
+    """None stands for an open."""
+    values = {name: exact(parts[name]) for name in ("resistance_ohm", "inductance_h", "capacitance_f") if name in parts}
+    each = []
+    if "resistance_ohm" in values:
+        each.append(mp.mpc(values["resistance_ohm"]))
+    if "inductance_h" in values:
+        each.append(J * omega * values["inductance_h"])
+    if "capacitance_f" in values:
+        each.append(None if omega == 0 or values["capacitance_f"] == 0 else 1 / (J * omega * values["capacitance_f"]))
+    if connection == "series":
+        return None if None in each else mp.fsum(each)
+    admittance = mp.mpc(0)
+    for impedance in each:
+        if impedance is None:
+            continue
+        if impedance == 0:
+            return mp.mpc(0)
+        admittance += 1 / impedance
+    return None if admittance == 0 else 1 / admittance
+
+
+def termination_impedance(value, omega, zc):
+    if value == "open":
+        return None
+    if value == "short":
+        return mp.mpc(0)
+    if value == "matched":
+        return zc
+    if isinstance(value, dict) and "kind" in value:
+        return parts_impedance(value, "series" if value["kind"] == "series_rlc" else "parallel", omega)
+    return complex_of(value)
+
+
+def zc_of(line, omega):
+    """What a line must be closed by to look the same from either end: Z = (a Z + b)/(c Z + d), where a = d."""
+    total = abcd_of_line(line, short_length(line, omega), omega)
+    root = mp.sqrt(total[0, 1] / total[1, 0])
+    return root if mp.re(root) >= 0 else -root
+
+
+def short_length(line, omega):
+    """A twentieth of a radian or of a neper at most, whichever comes first."""
+    z, y = per_metre(line, omega)
+    return mp.mpf(2) ** -int(mp.ceil(mp.log(20 * abs(mp.sqrt(abs(z * y))), 2)))
+
+
+def secondary(case):
+    line, omega = case["line"], 2 * mp.pi * exact(case["frequency_hz"])
+    length = short_length(line, omega)
+    total = abcd_of_line(line, length, omega)
+    # The eigenvalues of the exponential are exp(+-gamma l), and alpha and beta have the same sign.
+    trace = (total[0, 0] + total[1, 1]) / 2
+    gamma = mp.log(trace + mp.sqrt(trace * trace - 1)) / length
+    if mp.im(gamma) < 0:
+        gamma = -gamma
+    zc = zc_of(line, omega)
+    return {
+        "/propagation_constant_per_m": gamma,
+        "/characteristic_impedance_ohm": zc,
+        "/attenuation_db_per_m": mp.re(gamma) * 20 / mp.log(10),
+        "/phase_velocity_m_per_s": omega / mp.im(gamma),
+        "/attenuation_np_per_m": mp.re(gamma),
+        "/phase_constant_rad_per_m": mp.im(gamma),
+    }
+
+
+def group_delay(function, omega):
+    """Of a phase, by Richardson's extrapolation of central differences with 130 digits in hand."""
+    h = omega * mp.mpf(10) ** -12
+    return (8 * (function(omega + h) - function(omega - h)) - (function(omega + 2 * h) - function(omega - 2 * h))) / (12 * h)
+
+
+def input_impedance(case):
+    omega = 2 * mp.pi * exact(case["frequency_hz"])
+    line = case["line"]
+    total = abcd_of_line(line, case["length_m"], omega)
+    zc = zc_of(line, omega) if omega else None
+    load = termination_impedance(case["termination"], omega, zc)
+    v, i = (mp.mpc(1), mp.mpc(0)) if load is None else (load, mp.mpc(1))
+    vin = total[0, 0] * v + total[0, 1] * i
+    iin = total[1, 0] * v + total[1, 1] * i
+    reference = complex_of(case.get("reference_impedance_ohm", 50))
+    gamma = (vin - mp.conj(reference) * iin) / (vin + reference * iin)
+    answer = {"/reflection_at_reference": gamma}
+    if abs(iin) > mp.mpf(10) ** -40:
+        answer["/input_impedance_ohm"] = vin / iin
+    if abs(vin) > mp.mpf(10) ** -40:
+        answer["/input_admittance_s"] = iin / vin
+    if zc is not None:
+        far = (v - zc * i) / (v + zc * i)
+        near = (vin - zc * iin) / (vin + zc * iin)
+        answer["/reflection_at_termination"] = far
+        answer["/reflection_at_input"] = near
+    size = abs(gamma)
+    if 0 < size < 1 - mp.mpf(10) ** -30 and case["name"].find("[no ratio]") < 0:
+        answer["/vswr"] = (1 + size) / (1 - size)
+        answer["/return_loss_db"] = -20 * mp.log10(size)
+    return answer
+
+
+def nodal(case, omega, driven, z1, z2):
+    """Voltages at the two ends with a unit source behind z1 (driven = 1) or z2 (driven = 2)."""
+    rows = []  # unknowns: node voltages 0..n, then a current for every branch that is not an admittance
+    nodes = 0
+    admittances, branches = [], []
+    for element in case["elements"]:
+        kind = element["kind"]
+        if kind == "line":
+            total = abcd_of_line(element["line"], element["length_m"], omega)
+            branches.append(("abcd", nodes, nodes + 1, total))
+            nodes += 1
+        elif kind == "transformer":
+            n = exact(element["turns_ratio"])
+            branches.append(("abcd", nodes, nodes + 1, mp.matrix([[n, 0], [0, 1 / n]])))
+            nodes += 1
+        elif kind == "series":
+            z = complex_of(element["impedance_ohm"]) if "impedance_ohm" in element else parts_impedance(element, element.get("connection", "series"), omega)
+            branches.append(("z", nodes, nodes + 1, z))
+            nodes += 1
+        elif kind == "shunt":
+            z = complex_of(element["impedance_ohm"]) if "impedance_ohm" in element else parts_impedance(element, element.get("connection", "series"), omega)
+            branches.append(("ground", nodes, None, z))
+        else:
+            total = abcd_of_line(element["line"], element["length_m"], omega)
+            if kind == "open_stub":
+                admittances.append((nodes, total[1, 0] / total[0, 0]))
+            else:
+                branches.append(("ground", nodes, None, total[0, 1] / total[1, 1]))
+    count = nodes + 1
+    extra = sum(2 if kind == "abcd" else 1 for kind, *_ in branches)
+    matrix = mp.zeros(count + extra, count + extra)
+    source = mp.zeros(count + extra, 1)
+    for node, y in admittances:
+        matrix[node, node] += y
+    for node, z, number in ((0, z1, 1), (nodes, z2, 2)):
+        matrix[node, node] += 1 / z
+        if driven == number:
+            source[node] += 1 / z
+    row = count
+    for kind, p, q, value in branches:
+        if kind == "z":
+            matrix[p, row] += 1
+            matrix[q, row] -= 1
+            if value is None:
+                matrix[row, row] = 1
+            else:
+                matrix[row, p], matrix[row, q], matrix[row, row] = 1, -1, -value
+            row += 1
+        elif kind == "ground":
+            matrix[p, row] += 1
+            if value is None:
+                matrix[row, row] = 1
+            else:
+                matrix[row, p], matrix[row, row] = 1, -value
+            row += 1
+        else:
+            # i1 leaves node p into the two-port, i2 leaves it into node q.
+            matrix[p, row] += 1
+            matrix[q, row + 1] -= 1
+            matrix[row, p], matrix[row, q], matrix[row, row + 1] = 1, -value[0, 0], -value[0, 1]
+            matrix[row + 1, row], matrix[row + 1, q], matrix[row + 1, row + 1] = 1, -value[1, 0], -value[1, 1]
+            row += 2
+    solution = mp.lu_solve(matrix, source)
+    return solution[0], solution[nodes]
+
+
+def scattering(case, omega):
+    given = case.get("reference_impedance_ohm", 50)
+    z1, z2 = (complex_of(each) for each in (given if isinstance(given, list) else [given, given]))
+    r1, r2 = mp.re(z1), mp.re(z2)
+    v1, v2 = nodal(case, omega, 1, z1, z2)
+    w1, w2 = nodal(case, omega, 2, z1, z2)
+    # Power waves: b = (V - Z* I) / (2 sqrt R), and a = 1 / (2 sqrt R) for a unit source behind Z.
+    i1, j2 = (1 - v1) / z1, (1 - w2) / z2
+    return {
+        "/s/s11": v1 - mp.conj(z1) * i1,
+        "/s/s21": (v2 + mp.conj(z2) * v2 / z2) * mp.sqrt(r1 / r2),
+        "/s/s12": (w1 + mp.conj(z1) * w1 / z1) * mp.sqrt(r2 / r1),
+        "/s/s22": w2 - mp.conj(z2) * j2,
+    }
+
+
+def cascade(case):
+    omega = 2 * mp.pi * exact(case["frequency_hz"])
+    answer = scattering(case, omega)
+    if answer["/s/s21"] != 0:
+        answer["/insertion_loss_db"] = -20 * mp.log10(abs(answer["/s/s21"]))
+        if omega:
+            reference = mp.arg(answer["/s/s21"])
+            phase = lambda w: mp.arg(scattering(case, w)["/s/s21"] / mp.expj(reference))
+            answer["/group_delay_s"] = -group_delay(phase, omega)
+    return answer
+
+
+CABLE = {"kind": "rlgc", "resistance_ohm_per_m": 0.12, "inductance_h_per_m": 2.5e-7, "conductance_s_per_m": 2.5e-5, "capacitance_f_per_m": 1e-10}
+LOSSY = {"kind": "rlgc", "resistance_ohm_per_m": 40, "inductance_h_per_m": 3e-7, "conductance_s_per_m": 2e-3, "capacitance_f_per_m": 1.2e-10}
+TELEPHONE = {"kind": "rlgc", "resistance_ohm_per_m": 0.168, "inductance_h_per_m": 6.1e-7, "conductance_s_per_m": 1e-10, "capacitance_f_per_m": 5.2e-11}
+ON_CHIP = {"kind": "rlgc", "resistance_ohm_per_m": 5e4, "inductance_h_per_m": 0, "conductance_s_per_m": 0, "capacitance_f_per_m": 2e-10}
+CRYOGENIC = {"kind": "rlgc", "resistance_ohm_per_m": 1e-9, "inductance_h_per_m": 2.5e-7, "conductance_s_per_m": 1e-13, "capacitance_f_per_m": 1e-10}
+LEAKY = {"kind": "rlgc", "resistance_ohm_per_m": 0, "inductance_h_per_m": 2.5e-7, "conductance_s_per_m": 0.3, "capacitance_f_per_m": 1e-10}
+FIFTY = {"kind": "lossless", "characteristic_impedance_ohm": 50, "velocity_factor": 0.66}
+SEVENTY = {"kind": "lossless", "characteristic_impedance_ohm": 75, "velocity_factor": 0.84}
+LINES = {"cable": CABLE, "lossy": LOSSY, "telephone": TELEPHONE, "on chip": ON_CHIP, "cryogenic": CRYOGENIC, "leaky": LEAKY, "fifty": FIFTY}
+
+
+def cases():
+    for name, line in LINES.items():
+        for frequency in (1, 50e3, 1e8, 7.3e9):
+            yield "lines/secondary-constants", {"name": f"{name} line at {frequency:g} Hz", "line": line, "frequency_hz": frequency}
+    loads = {
+        "75-30j": {"re": 75, "im": -30},
+        "open": "open",
+        "short": "short",
+        "series RLC": {"kind": "series_rlc", "resistance_ohm": 3, "inductance_h": 2e-8, "capacitance_f": 5e-11},
+        "parallel RLC": {"kind": "parallel_rlc", "resistance_ohm": 900, "inductance_h": 4e-8, "capacitance_f": 2e-11},
+    }
+    for name, line, length in (("cable", CABLE, 3.2), ("lossy", LOSSY, 0.7), ("telephone", TELEPHONE, 2000), ("on chip", ON_CHIP, 2e-3)):
+        for load, termination in loads.items():
+            frequency = 1e5 if name == "telephone" else 94.3125e6
+            yield "terminations/input-impedance", {"name": f"{name} line closed by {load}", "line": line, "length_m": length, "termination": termination, "frequency_hz": frequency}
+    more = [
+        ("direct current into 75 ohm", CABLE, 3.2, 75, 0, 50),
+        ("direct current, open, leaking", CABLE, 3.2, "open", 0, 50),
+        ("direct current, no conductance, 50 ohm", ON_CHIP, 2e-3, 50, 0, 50),
+        ("200 dB of loss, short", LOSSY, 200 * 0.115129254649702 / 0.1, "short", 1e8, 50),
+        ("200 dB of loss, complex reference", LOSSY, 230.3, {"re": 20, "im": 300}, 1e8, {"re": 40, "im": -25}),
+        ("electrically tiny, open", CABLE, 1e-9, "open", 1e6, 50),
+        ("electrically tiny, short", CABLE, 1e-9, "short", 1e6, 50),
+        ("length 0", CABLE, 0, {"re": 12, "im": 7}, 1e9, 50),
+        ("beside the pole of a shorted quarter wave", CRYOGENIC, 0.5000001, "short", 1e8, 50),
+        ("beside the zero of an open quarter wave", CABLE, 0.49999, "open", 1e8, 50),
+        ("very low loss, 75 ohm", CRYOGENIC, 12.25, 75, 1e8, 50),
+        ("half wave repeats the load", FIFTY, 0.9893151114, {"re": 20, "im": 45}, 1e8, 50),
+        ("complex reference", CABLE, 1.7, {"re": 33, "im": 12}, 2.1e8, {"re": 45, "im": 20}),
+        ("active load [no ratio]", CABLE, 1.7, {"re": -20, "im": 12}, 2.1e8, 50),
+        ("long, many turns", CABLE, 40, 60, 1e9, 75),
+        ("leaking line at 1 GHz", LEAKY, 0.2, 50, 1e9, 50),
+    ]
+    for name, line, length, termination, frequency, reference in more:
+        yield "terminations/input-impedance", {"name": name, "line": line, "length_m": length, "termination": termination, "frequency_hz": frequency, "reference_impedance_ohm": reference}
+    chains = [
+        ("one cable", [{"kind": "line", "line": CABLE, "length_m": 3.2}], 1e8, 50),
+        ("two unlike lines", [{"kind": "line", "line": CABLE, "length_m": 1.1}, {"kind": "line", "line": SEVENTY, "length_m": 0.37}], 3.3e8, 50),
+        ("low-pass filter", [{"kind": "shunt", "capacitance_f": 5.08e-11}, {"kind": "series", "inductance_h": 8.7e-8}, {"kind": "shunt", "capacitance_f": 5.08e-11}], 1.2e8, 50),
+        ("filter of resonators", [{"kind": "series", "inductance_h": 3e-8, "capacitance_f": 4e-11, "resistance_ohm": 0.2}, {"kind": "shunt", "inductance_h": 2e-8, "capacitance_f": 6e-11, "resistance_ohm": 4000, "connection": "parallel"}, {"kind": "series", "inductance_h": 3e-8, "capacitance_f": 4e-11, "connection": "parallel"}], 1.43e8, 50),
+        ("attenuator", [{"kind": "series", "resistance_ohm": 16.61}, {"kind": "shunt", "resistance_ohm": 66.93}, {"kind": "series", "resistance_ohm": 16.61}], 1e6, 50),
+        ("stubs", [{"kind": "open_stub", "line": CABLE, "length_m": 0.31}, {"kind": "line", "line": CABLE, "length_m": 0.22}, {"kind": "short_stub", "line": SEVENTY, "length_m": 0.41}], 2.2e8, 50),
+        ("transformer", [{"kind": "transformer", "turns_ratio": 2}, {"kind": "line", "line": CABLE, "length_m": 0.6}, {"kind": "series", "impedance_ohm": {"re": 4, "im": -9}}], 1.7e8, [50, 12.5]),
+        ("complex references", [{"kind": "line", "line": LOSSY, "length_m": 0.5}, {"kind": "shunt", "impedance_ohm": {"re": 200, "im": 90}}], 4e8, [{"re": 50, "im": 10}, {"re": 75, "im": -20}]),
+        ("200 dB of loss", [{"kind": "line", "line": LOSSY, "length_m": 80}, {"kind": "shunt", "capacitance_f": 2e-12}], 1e8, 50),
+        ("direct current through parts", [{"kind": "series", "inductance_h": 1e-8, "resistance_ohm": 3}, {"kind": "shunt", "capacitance_f": 1e-12}, {"kind": "line", "line": CABLE, "length_m": 30}], 0, 50),
+        ("direct current stopped by a capacitor", [{"kind": "series", "capacitance_f": 1e-9}, {"kind": "shunt", "resistance_ohm": 200}], 0, 50),
+        ("electrically tiny", [{"kind": "line", "line": CABLE, "length_m": 1e-8}, {"kind": "line", "line": LOSSY, "length_m": 1e-8}], 1e6, 50),
+        ("twelve sections", [{"kind": "line", "line": SEVENTY if k % 2 else CABLE, "length_m": 0.05 + 0.01 * k} for k in range(12)], 9e8, 50),
+        ("RC line on a chip", [{"kind": "series", "resistance_ohm": 200}, {"kind": "line", "line": ON_CHIP, "length_m": 3e-3}, {"kind": "shunt", "capacitance_f": 3e-14}], 5e9, 50),
+    ]
+    for name, elements, frequency, reference in chains:
+        yield "networks/cascade", {"name": name, "elements": elements, "frequency_hz": frequency, "reference_impedance_ohm": reference}
+
+
+COMPUTE = {"lines/secondary-constants": secondary, "terminations/input-impedance": input_impedance, "networks/cascade": cascade}
+
+
+def digits(value):
+    # What 130 digits leave of an exact zero.
+    if abs(value) < mp.mpf(10) ** -100:
+        return "0.0"
+    return mp.nstr(value, 30, strip_zeros=True, min_fixed=0, max_fixed=0)
+
+
+def written(value):
+    if isinstance(value, mp.mpc):
+        return {"re": digits(value.real), "im": digits(value.imag)}
+    return digits(value)
+
+
+def document():
+    entries = []
+    for calculation, case in cases():
+        given = {key: value for key, value in case.items() if key != "name"}
+        expected = {pointer: written(value) for pointer, value in COMPUTE[calculation](case).items()}
+        entries.append({"calculation": calculation, "name": case["name"], "input": given, "expected": expected})
+    return json.dumps(entries, indent=1) + "\n"
+
+
+if __name__ == "__main__":
+    text = document()
+    if "--check" in sys.argv:
+        sys.exit(0 if TARGET.read_text() == text else "telegrapher.json differs from what generate.py makes")
+    TARGET.write_text(text)

@@ -91,13 +91,13 @@ describe('a refusal', () => {
     expect(await unitsOf(`key:${id}`)).toBe(0);
   });
 
-  test('of an impossible line gives its units back with its row', async () => {
+  test('of an impossible input gives its units back with its row', async () => {
     const organization = await createOrganization();
     const { id, secret } = await createKey(organization, { monthly_unit_quota: 10 });
     const answer = await oneUnitCall(secret, { body: impossibleInput });
     expect(answer.status).toBe(422);
     expect(answer.body.code).toBe('invalid-input');
-    expect(answer.body.errors.length).toBeGreaterThan(0);
+    expect(answer.body.errors.map(({ pointer }: { pointer: string }) => pointer)).toEqual(['/termination', '/reference_impedance_ohm']);
     expect(await unitsOf(`key:${id}`)).toBe(0);
     expect(await unitsOf(`organization:${organization.id}`)).toBe(0);
     expect(await database()('call').where({ key_id: id }).select('status', 'units', 'problem')).toEqual([{ status: 422, units: 0, problem: 'invalid-input' }]);
@@ -116,8 +116,5 @@ describe('the monthly quota', () => {
   });
 });
 
-/** A shield inside its own conductor: each number may be, the two together may not. */
-const impossibleInput = {
-  ...oneUnitInput,
-  line: { kind: 'coaxial', inner_diameter_m: 0.003, outer_diameter_m: 0.001, conductor: 'copper', shield: 'copper', dielectric: 'vacuum' },
-};
+/** Well formed, but nothing closes the line and the reference takes no power. */
+const impossibleInput = { ...oneUnitInput, termination: { kind: 'series_rlc' }, reference_impedance_ohm: { re: 0, im: 50 } };

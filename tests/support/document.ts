@@ -67,6 +67,8 @@ function ajvOf(root: Json): Ajv2020 {
   // An OpenAPI document is more than a schema, hence not strict; numbers are: NaN is none.
   const ajv = new Ajv2020({ strict: false, strictNumbers: true, allErrors: true, validateSchema: false });
   addFormats(ajv as never);
+  // Their patterns say the same; the names are for people.
+  for (const name of ['ipv4-cidr', 'ipv6-cidr']) ajv.addFormat(name, true);
   ajv.addSchema(root, 'document');
   return ajv;
 }

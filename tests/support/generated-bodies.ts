@@ -1,0 +1,134 @@
+/**
+ * Request bodies made at random: right ones by the input schema as the document shows it, and wrong ones
+ * made from right ones. Everything comes from fast-check, so a seed gives the same bodies again.
+ */
+import fc from 'fast-check';
+import { document } from './document';
+import type { Json } from './json';
+
+/** Values that a schema of ours is likely to have bounds for. */
+const numbers = fc.oneof(
+  { weight: 6, arbitrary: fc.double({ min: 0, max: 1e3, noNaN: true }) },
+  { weight: 2, arbitrary: fc.constantFrom(0, 1, 50, 75, 1e-12, 1e6, 1e9, 2.5e-7) },
+  { weight: 1, arbitrary: fc.double({ min: -1e15, max: 1e15, noNaN: true }) },
+);
+
+/** Bodies that the schema accepts, as far as a schema can say. */
+export function rightBodies(schema: Json): fc.Arbitrary<Json> {
+  return fromSchema(schema, 0);
+}
+
+function fromSchema(schema: Json, depth: number): fc.Arbitrary<Json> {
+  if (schema.$ref) return fromSchema(resolve(schema.$ref), depth);
+  if ('const' in schema) return fc.constant(schema.const);
+  if (schema.enum) return fc.constantFrom(...schema.enum);
+  const branches = schema.oneOf ?? schema.anyOf;
+  if (branches) return fc.oneof(...branches.map((branch: Json) => fromSchema(branch, depth)));
+  if (schema.allOf) return fromSchema(Object.assign({}, ...schema.allOf.map((part: Json) => (part.$ref ? resolve(part.$ref) : part))), depth);
+  switch (schema.type) {
+    case 'object':
+      return objectOf(schema, depth);
+    case 'array':
+      return listOf(schema, depth);
+    case 'integer':
+      return fc.integer({ min: schema.minimum ?? -1000, max: Math.min(schema.maximum ?? 1000, 1000) });
+    case 'number':
+      return numbers.map((value) => within(value, schema));
+    case 'boolean':
+      return fc.boolean();
+    case 'string':
+      return fc.string({ minLength: schema.minLength ?? 0, maxLength: Math.min(schema.maxLength ?? 20, 20) });
+    case 'null':
+      return fc.constant(null);
+    default:
+      throw new Error(`no value is known for the schema ${JSON.stringify(schema).slice(0, 200)}`);
+  }
+}
+
+function objectOf(schema: Json, depth: number): fc.Arbitrary<Json> {
+  const members = Object.entries<Json>(schema.properties ?? {}).map(([name, member]) => [name, fromSchema(member, depth + 1)]);
+  return fc.record(Object.fromEntries(members), { requiredKeys: schema.required ?? [] });
+}
+
+/** Short, or as long as the bounds demand; never as long as they allow. */
+function listOf(schema: Json, depth: number): fc.Arbitrary<Json> {
+  const least = schema.minItems ?? 0;
+  const items = schema.prefixItems?.length ? fc.oneof(...schema.prefixItems.map((item: Json) => fromSchema(item, depth + 1))) : fromSchema(schema.items, depth + 1);
+  return fc.array(items, { minLength: least, maxLength: Math.min(schema.maxItems ?? 4, Math.max(least, 4)) });
+}
+
+function within(value: number, { minimum, maximum, exclusiveMinimum, exclusiveMaximum }: Json): number {
+  const low = minimum ?? (exclusiveMinimum !== undefined ? exclusiveMinimum + 1e-6 : -1e15);
+  const high = maximum ?? (exclusiveMaximum !== undefined ? exclusiveMaximum - 1e-6 : 1e15);
+  return Math.min(Math.max(value, low), high);
+}
+
+function resolve(reference: string): Json {
+  return reference
+    .split('/')
+    .slice(1)
+    .reduce((node: Json, part) => node[part], document);
+}
+
+/** What stands in no field of ours, or in the wrong one. */
+const strangeValues: fc.Arbitrary<Json> = fc.oneof(
+  fc.constantFrom(null, true, false, '', 'NaN', 'Infinity', '-Infinity', '1e999', '50', 'open', [], {}, [[]], [null], -1, -0, 1e308, 5e-324, 2 ** 53 + 2, '\u0000', '\ud800', 'x'.repeat(5000)),
+  fc.constantFrom({ re: 1 }, { re: '1', im: 0 }, { magnitude: -1, angle_deg: 0 }, { kind: 'lossless' }, { kind: 'no-such-kind' }, { start: 2, stop: 1, points: 3 }, { start: 0, stop: 1, points: 3, spacing: 'log' }),
+  fc.string({ unit: 'binary', maxLength: 40 }),
+  fc.jsonValue({ maxDepth: 3 }),
+);
+
+const strangeNames = fc.oneof(fc.constantFrom('__proto__', 'constructor', 'prototype', 'toString', 'hasOwnProperty', '', 'a/b', 'm~n', '\u0000', 'ü', 'length_mm', 'x'.repeat(300)), fc.string({ unit: 'binary', maxLength: 20 }));
+
+/** A right body with one to three places changed: another value, a member more, less, or renamed. */
+export function wrongBodies(schema: Json): fc.Arbitrary<Json> {
+  const change = fc.record({ at: fc.nat(10_000), how: fc.constantFrom('replace', 'replace', 'add', 'remove', 'rename'), value: strangeValues, name: strangeNames });
+  return fc.tuple(rightBodies(schema), fc.array(change, { minLength: 1, maxLength: 3 })).map(([body, changes]) => {
+    const root = { body: structuredClone(body) };
+    for (const { at, how, value, name } of changes) {
+      const places = placesOf(root.body, root, 'body');
+      const { parent, key } = places[at % places.length];
+      if (how === 'replace') define(parent, key, value);
+      else if (how === 'remove' && parent !== root) Array.isArray(parent) ? parent.splice(Number(key), 1) : delete parent[key];
+      else if (how === 'rename' && parent !== root && !Array.isArray(parent)) {
+        const moved = parent[key];
+        delete parent[key];
+        define(parent, name, moved);
+      } else if (typeof parent[key] === 'object' && parent[key] !== null) define(parent[key], name, value);
+    }
+    return root.body;
+  });
+}
+
+/** As JSON.parse would: `__proto__` becomes a member like any other. */
+function define(target: Json, name: string, value: Json): void {
+  if (Array.isArray(target)) target.push(structuredClone(value));
+  else Object.defineProperty(target, name, { value: structuredClone(value), enumerable: true, configurable: true, writable: true });
+}
+
+function placesOf(value: Json, parent: Json, key: string): { parent: Json; key: string }[] {
+  const here = [{ parent, key }];
+  if (typeof value !== 'object' || value === null) return here;
+  return [...here, ...Object.keys(value).slice(0, 20).flatMap((name) => placesOf(value[name], value, name))];
+}
+
+/** Texts that no object could be written as: numbers beyond a double, members twice, nesting, length. */
+export const strangeTexts: fc.Arbitrary<(body: string) => string> = fc.constantFrom<((body: string) => string)[]>(
+  (body) => body.replace(/-?\d+(\.\d+)?(e[+-]?\d+)?/i, '1e999'),
+  (body) => body.replace(/-?\d+(\.\d+)?(e[+-]?\d+)?/i, '-1e999'),
+  (body) => body.replace(/-?\d+(\.\d+)?(e[+-]?\d+)?/i, '123456789012345678901234567890'),
+  (body) => body.replace(/-?\d+(\.\d+)?(e[+-]?\d+)?/i, '0.1e-400'),
+  (body) => body.replace(/-?\d+(\.\d+)?(e[+-]?\d+)?/i, 'NaN'),
+  (body) => body.replace(/-?\d+(\.\d+)?(e[+-]?\d+)?/i, '0x10'),
+  (body) => body.replace(/^\{/, '{"frequency_hz": "twice", '),
+  (body) => body.replace(/\}$/, ', "frequency_hz": "twice"}'),
+  (body) => body.replace(/\}$/, ', "__proto__": {"polluted": true}}'),
+  (body) => body.replace(/\}$/, `, "deep": ${'['.repeat(5000)}${']'.repeat(5000)}}`),
+  (body) => body.replace(/\}$/, `, "frequency_hz": [${'1e6,'.repeat(200_000)}1]}`),
+  (body) => body.replace(/\}$/, `, "frequency_hz": [${'"x",'.repeat(150_000)}1]}`),
+  (body) => body.replace(/\}$/, `, ${Array.from({ length: 20_000 }, (_, index) => `"f${index}":1`).join()}}`),
+  (body) => body.replace(/\}$/, ', "\\ud800": "\\udfff\\u0000"}'),
+  (body) => body.slice(0, -1),
+  (body) => `[${body}]`,
+  (body) => JSON.stringify(body),
+);

@@ -31,6 +31,7 @@ export default defineConfig({
           name: 'fast',
           include: ['tests/{unit,reference,property,house}/**/*.test.ts'],
           testTimeout: 30_000,
+          hookTimeout: 60_000,
           sequence: { groupOrder: 0 },
         },
       },

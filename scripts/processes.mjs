@@ -16,10 +16,11 @@ export function track(child, patience = 5_000) {
   return () => running.delete(child);
 }
 
-/** Answers `{ code, output }`; `echo` also shows the output as it comes. */
+/** Answers `{ code, output }`; `echo` also shows the output as it comes. In plain text, for it may go to a file. */
 export function run(program, words, { env = process.env, echo = false, input = '' } = {}) {
   return new Promise((resolve, reject) => {
-    const child = spawn(program, words, { cwd: repository, env, detached: true });
+    const { FORCE_COLOR: _, ...uncoloured } = env;
+    const child = spawn(program, words, { cwd: repository, env: { ...uncoloured, NO_COLOR: '1' }, detached: true });
     const untrack = track(child);
     let output = '';
     for (const stream of [child.stdout, child.stderr]) {

@@ -122,8 +122,9 @@ function errorsOfUnion(issue: UnionIssue, path: Path): FieldError[] {
   const entered = branches.filter((branch) => !branch.some(refusesShape));
   const nearest = entered.toSorted((a, b) => complaints(a) - complaints(b))[0];
   if (nearest) return nearest.flatMap((inner) => errorsOf(inner, path));
-  const shapes = new Set(branches.flatMap((branch) => branch.filter(refusesShape).flatMap(shapesOf)));
-  return [fieldError(path, issue.input === undefined ? 'required' : 'invalid_type', `must be ${[...shapes].join(' or ')}${got(issue.input)}`)];
+  const shapes = [...new Set(branches.flatMap((branch) => branch.filter(refusesShape).flatMap(shapesOf)))].join(' or ');
+  if (issue.input === undefined) return [fieldError(path, 'required', `is required (${shapes})`)];
+  return [fieldError(path, 'invalid_type', `must be ${shapes}${got(issue.input)}`)];
 }
 
 /** A union within a union is one with all their branches. */

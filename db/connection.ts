@@ -19,8 +19,8 @@ const holder = globalThis as typeof globalThis & { linewrightPools?: Pools };
 
 function pools(): Pools {
   holder.linewrightPools ??= {
-    database: connect(12, ''),
-    admission: connect(8, '-c synchronous_commit=off'),
+    database: connect(12, '', 5500),
+    admission: connect(8, '-c synchronous_commit=off', 2500),
   };
   return holder.linewrightPools;
 }
@@ -39,8 +39,11 @@ export async function closeDatabase(): Promise<void> {
   await Promise.all([open?.database.destroy(), open?.admission.destroy()]);
 }
 
-/** Short timeouts: with the database away a caller should hear 503 within two seconds. */
-function connect(size: number, options: string): Knex {
+/**
+ * Short timeouts: with the database away a caller should hear 503 within seconds. The server ends a long
+ * statement itself; `patience` is for one that has gone silent.
+ */
+function connect(size: number, options: string, patience: number): Knex {
   const connectionString = process.env.DATABASE_URL;
   if (!connectionString) throw new Error('DATABASE_URL is not set');
   return knex({
@@ -49,6 +52,7 @@ function connect(size: number, options: string): Knex {
       connectionString,
       connectionTimeoutMillis: 1200,
       statement_timeout: 5000,
+      query_timeout: patience,
       application_name: 'linewright',
       ...(options && { options }),
     },
@@ -56,6 +60,10 @@ function connect(size: number, options: string): Knex {
     pool: { min: 0, max: size },
   });
 }
+
+/** What the driver says without a code, after the statement that was under way. */
+const lostConnection =
+  /(^| - )(Connection terminated|Client has encountered a connection error|Query read timeout|timeout expired|timeout exceeded when trying to connect)/i;
 
 /**
  * Whether an error means that the database cannot be reached or cannot serve now, as opposed to a fault of
@@ -70,6 +78,6 @@ export function isDatabaseAway(error: unknown): boolean {
   return (
     /^(08|53|57)[0-9A-Z]{3}$/.test(code) ||
     /^(ECONN|EPIPE|ETIMEDOUT|ENOTFOUND|EHOSTUNREACH|EAI_AGAIN)/.test(code) ||
-    /^(Connection terminated|timeout expired|timeout exceeded when trying to connect)/i.test(error.message)
+    (code === '' && lostConnection.test(error.message))
   );
 }

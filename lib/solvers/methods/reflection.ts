@@ -28,12 +28,18 @@ export interface Reflection<T> {
 
 /**
  * Range: any pair (V, I) that is not (0, 0). Accuracy: Gamma to rounding; `absorbed` keeps its own relative accuracy where |Gamma| is
- * nearly 1. Throws nothing. The trap: Gamma of a load equal to a complex Zr is not 0; that of its conjugate is.
+ * nearly 1, as far as `power`, Re(V I*), does; a caller who knows it better than as a product gives it.
+ * Throws nothing. The trap: Gamma of a load equal to a complex Zr is not 0; that of its conjugate is.
  */
-export function reflection<T extends Phasor<T>>(space: Space<T>, v: T, i: T, reference: T): Reflection<T> {
+export function reflection<T extends Phasor<T>>(
+  space: Space<T>,
+  v: T,
+  i: T,
+  reference: T,
+  power: Float64Array = space.column(v.mul(i.conjugate())).re,
+): Reflection<T> {
   const denominator = v.add(reference.mul(i));
   const gamma = v.sub(reference.conjugate().mul(i)).div(denominator);
-  const power = space.column(v.mul(i.conjugate())).re;
   const resistance = space.column(reference).re;
   const size = magnitudes(space, denominator);
   const absorbed = power.map((each, index) => (4 * resistance[index] * (each / size[index])) / size[index]);

@@ -3,6 +3,7 @@ import { defineCalculation } from '../../calculation';
 import { ImpossibleInput } from '../../errors';
 import { line, lineConstants, type Line } from '../../lines/line';
 import { lineWarnings } from '../../lines/line-warnings';
+import { powerIntoLine } from '../../methods/line-power';
 import { lineTwoPort, telegrapherTwoPort } from '../../methods/line-two-port';
 import { impedanceColumn, lumpedImpedance, oddScaleOf } from '../../methods/one-port';
 import { powerWaves, reflection, returnLossDb, standingWaveRatio } from '../../methods/reflection';
@@ -121,8 +122,8 @@ function compute(given: Line, lengthM: number, closedBy: Termination, frequencie
     const own = impedanceColumn(space, Zc.re, Zc.im, Zc.infinite);
     const forward = load.v.mul(own.i).add(own.v.mul(load.i));
     const atTermination = load.v.mul(own.i).sub(own.v.mul(load.i)).div(forward);
-    const atReference = reflection(space, V, I, space.constant(complexParts(referenceOhm)));
-    const allReflected = (index: number) => atReference.absorbed[index] <= vanishing * two.sensitivity[index];
+    const power = powerIntoLine(constants, waves, lengthM, space.column(load.v), space.column(load.i));
+    const atReference = reflection(space, V, I, space.constant(complexParts(referenceOhm)), power);
     return {
       frequency_hz: finiteColumn(frequencies),
       input_impedance_ohm: columns.complex(space.column(V.div(I)), { pointer: '/input_impedance_ohm', code: 'pole', reason: 'no current enters, so the impedance is infinite' }, noCurrent),
@@ -131,7 +132,7 @@ function compute(given: Line, lengthM: number, closedBy: Termination, frequencie
       reflection_at_termination: columns.complex(space.column(atTermination), { pointer: '/reflection_at_termination', code: 'no_value', reason: 'there is no forward wave to compare with' }),
       reflection_at_input: columns.complex(space.column(atTermination.mul(two.roundTrip)), { pointer: '/reflection_at_input', code: 'no_value', reason: 'there is no forward wave to compare with' }),
       reflection_at_reference: columns.complex(space.column(atReference.gamma), { pointer: '/reflection_at_reference', code: 'no_value', reason: 'there is no forward wave to compare with' }),
-      vswr: columns.real(standingWaveRatio(atReference), { pointer: '/vswr', code: 'whole_reflection', reason: 'the reflection is whole or more, so there is no finite ratio' }, allReflected),
+      vswr: columns.real(standingWaveRatio(atReference), { pointer: '/vswr', code: 'whole_reflection', reason: 'the reflection is whole or more, so there is no finite ratio' }),
       return_loss_db: columns.real(returnLossDb(atReference), { pointer: '/return_loss_db', code: 'no_reflection', reason: 'nothing is reflected, so the return loss is infinite' }),
     };
   });

@@ -13,23 +13,23 @@ const numbers = fc.oneof(
   { weight: 1, arbitrary: fc.double({ min: -1e15, max: 1e15, noNaN: true }) },
 );
 
-/** Bodies that the schema accepts, as far as a schema can say. */
-export function rightBodies(schema: Json): fc.Arbitrary<Json> {
-  return fromSchema(schema, 0);
+/** Bodies that the schema accepts, as far as a schema can say; `root` is where its references point into. */
+export function rightBodies(schema: Json, root: Json = document): fc.Arbitrary<Json> {
+  return fromSchema(schema, root);
 }
 
-function fromSchema(schema: Json, depth: number): fc.Arbitrary<Json> {
-  if (schema.$ref) return fromSchema(resolve(schema.$ref), depth);
+function fromSchema(schema: Json, root: Json): fc.Arbitrary<Json> {
+  if (schema.$ref) return fromSchema(resolve(schema.$ref, root), root);
   if ('const' in schema) return fc.constant(schema.const);
   if (schema.enum) return fc.constantFrom(...schema.enum);
   const branches = schema.oneOf ?? schema.anyOf;
-  if (branches) return fc.oneof(...branches.map((branch: Json) => fromSchema(branch, depth)));
-  if (schema.allOf) return fromSchema(Object.assign({}, ...schema.allOf.map((part: Json) => (part.$ref ? resolve(part.$ref) : part))), depth);
+  if (branches) return fc.oneof(...branches.map((branch: Json) => fromSchema(branch, root)));
+  if (schema.allOf) return fromSchema(Object.assign({}, ...schema.allOf.map((part: Json) => (part.$ref ? resolve(part.$ref, root) : part))), root);
   switch (schema.type) {
     case 'object':
-      return objectOf(schema, depth);
+      return objectOf(schema, root);
     case 'array':
-      return listOf(schema, depth);
+      return listOf(schema, root);
     case 'integer':
       return fc.integer({ min: schema.minimum ?? -1000, max: Math.min(schema.maximum ?? 1000, 1000) });
     case 'number':
@@ -45,15 +45,15 @@ function fromSchema(schema: Json, depth: number): fc.Arbitrary<Json> {
   }
 }
 
-function objectOf(schema: Json, depth: number): fc.Arbitrary<Json> {
-  const members = Object.entries<Json>(schema.properties ?? {}).map(([name, member]) => [name, fromSchema(member, depth + 1)]);
+function objectOf(schema: Json, root: Json): fc.Arbitrary<Json> {
+  const members = Object.entries<Json>(schema.properties ?? {}).map(([name, member]) => [name, fromSchema(member, root)]);
   return fc.record(Object.fromEntries(members), { requiredKeys: schema.required ?? [] });
 }
 
 /** Short, or as long as the bounds demand; never as long as they allow. */
-function listOf(schema: Json, depth: number): fc.Arbitrary<Json> {
+function listOf(schema: Json, root: Json): fc.Arbitrary<Json> {
   const least = schema.minItems ?? 0;
-  const items = schema.prefixItems?.length ? fc.oneof(...schema.prefixItems.map((item: Json) => fromSchema(item, depth + 1))) : fromSchema(schema.items, depth + 1);
+  const items = schema.prefixItems?.length ? fc.oneof(...schema.prefixItems.map((item: Json) => fromSchema(item, root))) : fromSchema(schema.items, root);
   return fc.array(items, { minLength: least, maxLength: Math.min(schema.maxItems ?? 4, Math.max(least, 4)) });
 }
 
@@ -63,11 +63,11 @@ function within(value: number, { minimum, maximum, exclusiveMinimum, exclusiveMa
   return Math.min(Math.max(value, low), high);
 }
 
-function resolve(reference: string): Json {
+function resolve(reference: string, root: Json): Json {
   return reference
     .split('/')
     .slice(1)
-    .reduce((node: Json, part) => node[part], document);
+    .reduce((node: Json, part) => node[part], root);
 }
 
 /** What stands in no field of ours, or in the wrong one. */
@@ -81,22 +81,22 @@ const strangeValues: fc.Arbitrary<Json> = fc.oneof(
 const strangeNames = fc.oneof(fc.constantFrom('__proto__', 'constructor', 'prototype', 'toString', 'hasOwnProperty', '', 'a/b', 'm~n', '\u0000', 'ü', 'length_mm', 'x'.repeat(300)), fc.string({ unit: 'binary', maxLength: 20 }));
 
 /** A right body with one to three places changed: another value, a member more, less, or renamed. */
-export function wrongBodies(schema: Json): fc.Arbitrary<Json> {
+export function wrongBodies(schema: Json, root: Json = document): fc.Arbitrary<Json> {
   const change = fc.record({ at: fc.nat(10_000), how: fc.constantFrom('replace', 'replace', 'add', 'remove', 'rename'), value: strangeValues, name: strangeNames });
-  return fc.tuple(rightBodies(schema), fc.array(change, { minLength: 1, maxLength: 3 })).map(([body, changes]) => {
-    const root = { body: structuredClone(body) };
+  return fc.tuple(rightBodies(schema, root), fc.array(change, { minLength: 1, maxLength: 3 })).map(([body, changes]) => {
+    const top = { body: structuredClone(body) };
     for (const { at, how, value, name } of changes) {
-      const places = placesOf(root.body, root, 'body');
+      const places = placesOf(top.body, top, 'body');
       const { parent, key } = places[at % places.length];
       if (how === 'replace') define(parent, key, value);
-      else if (how === 'remove' && parent !== root) Array.isArray(parent) ? parent.splice(Number(key), 1) : delete parent[key];
-      else if (how === 'rename' && parent !== root && !Array.isArray(parent)) {
+      else if (how === 'remove' && parent !== top) removeFrom(parent, key);
+      else if (how === 'rename' && parent !== top && !Array.isArray(parent)) {
         const moved = parent[key];
         delete parent[key];
         define(parent, name, moved);
       } else if (typeof parent[key] === 'object' && parent[key] !== null) define(parent[key], name, value);
     }
-    return root.body;
+    return top.body;
   });
 }
 
@@ -104,6 +104,11 @@ export function wrongBodies(schema: Json): fc.Arbitrary<Json> {
 function define(target: Json, name: string, value: Json): void {
   if (Array.isArray(target)) target.push(structuredClone(value));
   else Object.defineProperty(target, name, { value: structuredClone(value), enumerable: true, configurable: true, writable: true });
+}
+
+function removeFrom(parent: Json, key: string): void {
+  if (Array.isArray(parent)) parent.splice(Number(key), 1);
+  else delete parent[key];
 }
 
 function placesOf(value: Json, parent: Json, key: string): { parent: Json; key: string }[] {

@@ -31,11 +31,14 @@ describe('the published document', () => {
     const accepts = requestValidator({ path, method });
     const schema = document.paths[path][method].requestBody.content['application/json'].schema;
 
+    // zod's own account of the schema: where the document is narrower, only bodies made from this one show it.
+    const own = z.toJSONSchema(operation.body!, { io: 'input' });
+
     test(`accepts for ${operation.id} what the validator accepts, and refuses what it refuses`, () => {
       let accepted = 0;
       let refused = 0;
       fc.assert(
-        fc.property(fc.oneof(rightBodies(schema), wrongBodies(schema)), (generated) => {
+        fc.property(fc.oneof(rightBodies(schema), wrongBodies(schema), rightBodies(own, own), wrongBodies(own, own)), (generated) => {
           // Through text, as a body comes.
           const body = JSON.parse(JSON.stringify(generated));
           const parsed = operation.body!.safeParse(body, { reportInput: true });

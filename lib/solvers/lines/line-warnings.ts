@@ -20,7 +20,14 @@ export function lineWarnings(line: Line, frequenciesHz: Float64Array, pointer = 
     {
       code: 'constants_over_decade',
       pointer,
-      detail: `R and G are taken as constant from ${lowest} to ${highest} Hz; the resistance of a real conductor grows with the root of frequency, and dielectric loss with frequency`,
+      detail: `R and G are taken as constant from ${inHertz(lowest)} to ${inHertz(highest)}; the resistance of a real conductor grows with the root of frequency, and dielectric loss with frequency`,
     },
   ];
+}
+
+/** 1e8 as "100 MHz", for a sentence. */
+function inHertz(frequencyHz: number): string {
+  const prefixes = ['', 'k', 'M', 'G', 'T', 'P'];
+  const step = Math.max(0, Math.min(prefixes.length - 1, Math.floor(Math.log10(frequencyHz) / 3)));
+  return `${Number((frequencyHz / 1000 ** step).toPrecision(6))} ${prefixes[step]}Hz`;
 }

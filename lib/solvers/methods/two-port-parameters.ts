@@ -47,6 +47,23 @@ export function scattering<T extends Phasor<T>>(space: Space<T>, two: TwoPort<T>
   };
 }
 
+/**
+ * The rounding of each entry in units of Number.EPSILON. To first order it may have grown at every element as if all conspired; against
+ * n it cannot: a Z2, b, c Z1 Z2 and d Z1 of a passive chain are no larger than n, and neither are their errors but for their number.
+ */
+export function roundingOfEntries<T extends Phasor<T>>(space: Space<T>, two: TwoPort<T>, { denominator }: Scattering<T>, z1: T, z2: T): TwoPort<T>['size'] {
+  const most = magnitudes(space, denominator).map((each, index) => each * two.roundings[index]);
+  const ohm1 = magnitudes(space, z1);
+  const ohm2 = magnitudes(space, z2);
+  const least = (size: Float64Array, ohm: (index: number) => number) => size.map((each, index) => Math.min(each, most[index] / ohm(index)));
+  return {
+    a: least(two.size.a, (index) => ohm2[index]),
+    b: least(two.size.b, () => 1),
+    c: least(two.size.c, (index) => ohm1[index] * ohm2[index]),
+    d: least(two.size.d, (index) => ohm1[index]),
+  };
+}
+
 /** [b1; a1] = T [a2; b2], without the scale. */
 export function transferScattering<T extends Phasor<T>>(space: Space<T>, { a, b, c, d }: TwoPort<T>, z1: T, z2: T) {
   const z1c = z1.conjugate();

@@ -9,7 +9,7 @@
  */
 import type { Method } from '../calculation';
 import type { Phasor, Space } from '../numeric/phasor';
-import { magnitudes } from '../numeric/phasor';
+import { clearDust, magnitudes } from '../numeric/phasor';
 import { binaryExponent, powerOfTwo } from '../numeric/power-of-two';
 import type { LineTwoPort } from './line-two-port';
 import { oddScaleOf, type OnePort } from './one-port';
@@ -28,34 +28,41 @@ export const entries = ['a', 'b', 'c', 'd'] as const;
 export interface TwoPort<T> extends Four<T> {
   /** scale times d(ABCD)/d omega. */
   readonly slope: Four<T>;
-  /** Sums of the magnitudes of the terms of each entry: what a vanishing entry is measured against. */
+  /** The rounding of each entry in units of Number.EPSILON, to first order: what a vanishing entry is measured against. */
   readonly size: Four<Float64Array>;
-  /** scale = factor * exp(-lossNp) * 2^exponent. */
+  /** How many roundings the chain has seen; those of a phase count as often as it turns, in radians. */
+  readonly roundings: Float64Array;
+  /** scale = factor * exp(-lossNp) * 2^exponent; factor is exactly 0 where nothing passes. */
   readonly factor: T;
-  readonly factorSize: Float64Array;
   readonly lossNp: Float64Array;
   readonly exponent: Float64Array;
 }
 
-export function seriesTwoPort<T extends Phasor<T>>(space: Space<T>, { v, i, vSlope, iSlope, vScale, iScale }: OnePort<T>): TwoPort<T> {
+export function seriesTwoPort<T extends Phasor<T>>(space: Space<T>, onePort: OnePort<T>): TwoPort<T> {
+  const { v, i: computed, vSlope, iSlope, vScale, iScale } = onePort;
+  const i = clearDust(space, computed, iScale);
   const zero = space.constant(0);
   const none = new Float64Array(space.length);
   return {
     a: i, b: v, c: zero, d: i,
     slope: { a: zero, b: quotientSlope(space, v, i, vSlope, iSlope), c: zero, d: zero },
     size: { a: iScale, b: vScale, c: none, d: iScale },
-    factor: i, factorSize: iScale, lossNp: none, exponent: none,
+    roundings: roundingsOf(space, onePort),
+    factor: i, lossNp: none, exponent: none,
   };
 }
 
-export function shuntTwoPort<T extends Phasor<T>>(space: Space<T>, { v, i, vSlope, iSlope, vScale, iScale }: OnePort<T>): TwoPort<T> {
+export function shuntTwoPort<T extends Phasor<T>>(space: Space<T>, onePort: OnePort<T>): TwoPort<T> {
+  const { v: computed, i, vSlope, iSlope, vScale, iScale } = onePort;
+  const v = clearDust(space, computed, vScale);
   const zero = space.constant(0);
   const none = new Float64Array(space.length);
   return {
     a: v, b: zero, c: i, d: v,
     slope: { a: zero, b: zero, c: quotientSlope(space, i, v, iSlope, vSlope), d: zero },
     size: { a: vScale, b: none, c: iScale, d: vScale },
-    factor: v, factorSize: vScale, lossNp: none, exponent: none,
+    roundings: roundingsOf(space, onePort),
+    factor: v, lossNp: none, exponent: none,
   };
 }
 
@@ -67,7 +74,8 @@ export function transformerTwoPort<T extends Phasor<T>>(space: Space<T>, n: numb
     a: space.constant(n), b: zero, c: zero, d: space.constant(1 / n),
     slope: { a: zero, b: zero, c: zero, d: zero },
     size: { a: column(n), b: none, c: none, d: column(1 / n) },
-    factor: space.constant(1), factorSize: column(1), lossNp: none, exponent: none,
+    roundings: column(1),
+    factor: space.constant(1), lossNp: none, exponent: none,
   };
 }
 
@@ -80,8 +88,17 @@ export function lineElementTwoPort<T extends Phasor<T>>(space: Space<T>, line: L
     a: line.even, b: line.series, c: line.shunt, d: line.even,
     slope: { a: line.evenSlope, b: line.seriesSlope, c: line.shuntSlope, d: line.evenSlope },
     size: { a: even, b: oddScaleOf(space, line, line.series), c: oddScaleOf(space, line, line.shunt), d: even },
-    factor: line.turn, factorSize: new Float64Array(space.length).fill(1), lossNp: line.lossNp, exponent: none,
+    roundings: line.sensitivity,
+    factor: line.turn, lossNp: line.lossNp, exponent: none,
   };
+}
+
+/** Of v and i, one may vanish and have only rounding left; the other then tells how much a phase was turned. */
+function roundingsOf<T extends Phasor<T>>(space: Space<T>, { v, i, vScale, iScale }: OnePort<T>): Float64Array {
+  const sizeV = magnitudes(space, v);
+  const sizeI = magnitudes(space, i);
+  const ratio = (scale: number, size: number) => (size > 0 ? scale / size : Infinity);
+  return sizeV.map((_, index) => Math.max(1, Math.min(ratio(vScale[index], sizeV[index]), ratio(iScale[index], sizeI[index]))));
 }
 
 /** d(x/y) times y, which is what the scaled matrix holds; where y vanishes nothing passes and there is no group delay to find. */
@@ -92,32 +109,70 @@ function quotientSlope<T extends Phasor<T>>(space: Space<T>, x: T, y: T, xSlope:
 
 /**
  * The chain of two, the first nearer to port 1. Range: any. Accuracy: a few units of rounding of `size`. Throws nothing.
- * The trap: products of many entries overflow, so each product is brought back to about 1 by a power of two, kept apart.
+ * The traps: products of many entries overflow, so each product is brought back to about 1 by a power of two, kept apart; and where
+ * both block, between them is a node that nothing determines, and the plain product of their matrices may be 0.
  */
 export function chain<T extends Phasor<T>>(space: Space<T>, first: TwoPort<T>, second: TwoPort<T>): TwoPort<T> {
-  const product = multiply(first, second);
+  const firstSizes = mapFour<T, Float64Array>(first, (each) => magnitudes(space, each));
+  const secondSizes = mapFour<T, Float64Array>(second, (each) => magnitudes(space, each));
+  const bothBlock = bothVanish(magnitudes(space, first.factor), magnitudes(space, second.factor));
+  const plain = multiply(first, second);
+  const product = bothBlock.includes(1) ? apart(space, bothBlock, plain, first, second, firstSizes, secondSizes) : plain;
   const slope = add(multiply(first.slope, second), multiply(first, second.slope));
-  const size = multiplySizes(first.size, second.size);
-  const shift = new Float64Array(space.length);
-  const down = new Float64Array(space.length);
-  for (let index = 0; index < space.length; index++) {
-    const largest = Math.max(size.a[index], size.b[index], size.c[index], size.d[index]);
-    shift[index] = largest > 0 && Number.isFinite(largest) ? Math.max(-1000, Math.min(1000, binaryExponent(largest))) : 0;
-    down[index] = powerOfTwo(-shift[index]);
-  }
+  const size = sizesOfProduct(first.size, firstSizes, second.size, secondSizes);
+  const shift = powersOf(...entries.map((name) => magnitudes(space, product[name])));
+  const down = shift.map((each) => powerOfTwo(-each));
   const factor = first.factor.mul(second.factor);
-  const factorSize = first.factorSize.map((each, index) => each * second.factorSize[index]);
-  const factorShift = factorSize.map((each) => (each > 0 && Number.isFinite(each) ? Math.max(-1000, Math.min(1000, binaryExponent(each))) : 0));
-  const factorDown = factorShift.map((each) => powerOfTwo(-each));
+  const factorShift = powersOf(magnitudes(space, factor));
   return {
     ...mapFour(product, (each) => space.scale(each, down)),
     slope: mapFour(slope, (each) => space.scale(each, down)),
     size: mapFour(size, (each) => each.map((value, index) => value * down[index])),
-    factor: space.scale(factor, factorDown),
-    factorSize: factorSize.map((each, index) => each * factorDown[index]),
+    roundings: first.roundings.map((each, index) => each + second.roundings[index]),
+    factor: space.scale(factor, factorShift.map((each) => powerOfTwo(-each))),
     lossNp: first.lossNp.map((each, index) => each + second.lossNp[index]),
     exponent: first.exponent.map((each, index) => each + second.exponent[index] + factorShift[index] - shift[index]),
   };
+}
+
+function bothVanish(first: Float64Array, second: Float64Array): Uint8Array {
+  return Uint8Array.from(first, (each, index) => (each === 0 && second[index] === 0 ? 1 : 0));
+}
+
+/** The power of two that brings the largest of several columns to about 1; 0 where all vanish. */
+function powersOf(...columns: readonly Float64Array[]): Float64Array {
+  return columns[0].map((_, index) => {
+    const largest = Math.max(...columns.map((each) => each[index]));
+    return largest > 0 && Number.isFinite(largest) ? Math.max(-1000, Math.min(1000, binaryExponent(largest))) : 0;
+  });
+}
+
+/**
+ * Two that block: each matrix is a column times a row, u v^T and x y^T, and their product u (v^T x) y^T. Only ratios of entries count,
+ * so u y^T stands for it, also where v^T x is 0: two blocking capacitors with a line between them, at direct current.
+ */
+function apart<T extends Phasor<T>>(
+  space: Space<T>,
+  bothBlock: Uint8Array,
+  plain: Four<T>,
+  first: TwoPort<T>,
+  second: TwoPort<T>,
+  firstSizes: Four<Float64Array>,
+  secondSizes: Four<Float64Array>,
+): Four<T> {
+  const share = (sizes: Four<Float64Array>, { size }: TwoPort<T>, name: (typeof entries)[number], index: number) =>
+    size[name][index] > 0 ? sizes[name][index] / size[name][index] : 0;
+  const isClearer = (sizes: Four<Float64Array>, two: TwoPort<T>, names: 'ac' | 'ab', others: 'bd' | 'cd') =>
+    Uint8Array.from(bothBlock, (_, index) => {
+      const best = (pair: string) => Math.max(...[...pair].map((name) => share(sizes, two, name as 'a', index)));
+      return best(names) >= best(others) ? 1 : 0;
+    });
+  const left = isClearer(firstSizes, first, 'ac', 'bd');
+  const upper = isClearer(secondSizes, second, 'ab', 'cd');
+  const u = [space.pick(left, first.a, first.b), space.pick(left, first.c, first.d)] as const;
+  const y = [space.pick(upper, second.a, second.c), space.pick(upper, second.b, second.d)] as const;
+  const outer = { a: u[0].mul(y[0]), b: u[0].mul(y[1]), c: u[1].mul(y[0]), d: u[1].mul(y[1]) };
+  return { a: space.pick(bothBlock, outer.a, plain.a), b: space.pick(bothBlock, outer.b, plain.b), c: space.pick(bothBlock, outer.c, plain.c), d: space.pick(bothBlock, outer.d, plain.d) };
 }
 
 function multiply<T extends Phasor<T>>(x: Four<T>, y: Four<T>): Four<T> {
@@ -133,9 +188,16 @@ function add<T extends Phasor<T>>(x: Four<T>, y: Four<T>): Four<T> {
   return { a: x.a.add(y.a), b: x.b.add(y.b), c: x.c.add(y.c), d: x.d.add(y.d) };
 }
 
-function multiplySizes(x: Four<Float64Array>, y: Four<Float64Array>): Four<Float64Array> {
-  const sum = (p: Float64Array, q: Float64Array, r: Float64Array, s: Float64Array) => p.map((each, index) => each * q[index] + r[index] * s[index]);
-  return { a: sum(x.a, y.a, x.b, y.c), b: sum(x.a, y.b, x.b, y.d), c: sum(x.c, y.a, x.d, y.c), d: sum(x.c, y.b, x.d, y.d) };
+/** d(x y) = dx y + x dy: the roundings of the two add, where their sizes would multiply. */
+function sizesOfProduct(dx: Four<Float64Array>, x: Four<Float64Array>, dy: Four<Float64Array>, y: Four<Float64Array>): Four<Float64Array> {
+  const term = (p: 'a' | 'b' | 'c' | 'd', q: 'a' | 'b' | 'c' | 'd') => dx[p].map((each, index) => each * y[q][index] + x[p][index] * dy[q][index]);
+  const sum = (first: Float64Array, second: Float64Array) => first.map((each, index) => each + second[index]);
+  return {
+    a: sum(term('a', 'a'), term('b', 'c')),
+    b: sum(term('a', 'b'), term('b', 'd')),
+    c: sum(term('c', 'a'), term('d', 'c')),
+    d: sum(term('c', 'b'), term('d', 'd')),
+  };
 }
 
 export function mapFour<Each, Other>(four: Four<Each>, change: (each: Each) => Other): Four<Other> {

@@ -82,7 +82,7 @@ export function magnitude(re: number, im: number): number {
 }
 
 /** Where a value is no more than the rounding of the terms it was made of, it is zero. */
-const dustInUnitsOfRounding = 4;
+const dustInUnitsOfRounding = 8;
 
 /** Sets to exactly 0 what is only rounding: `scales` is the sum of the magnitudes of the value's own terms. */
 export function clearDust<T extends Phasor<T>>(space: Space<T>, value: T, scales: Float64Array): T {

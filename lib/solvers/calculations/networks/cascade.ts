@@ -8,7 +8,7 @@ import { telegrapherTwoPort } from '../../methods/line-two-port';
 import { impedance, lumpedImpedance } from '../../methods/one-port';
 import { powerWaves, reflection, returnLossDb } from '../../methods/reflection';
 import { chain, mapFour, transmissionMatrix } from '../../methods/two-port';
-import { insertionLossDb, largestGain, scattering, tOrder, transferScattering, twoPortConversion, withoutScale, withScale } from '../../methods/two-port-parameters';
+import { insertionLossDb, largestGain, roundingOfEntries, scattering, tOrder, transferScattering, twoPortConversion, withoutScale, withScale } from '../../methods/two-port-parameters';
 import { complexColumn, frequencyColumn, nullableColumn } from '../../nouns/columns';
 import { frequenciesHz, frequency, pointsOf } from '../../nouns/frequency';
 import { portReferenceImpedances, portReferences, referenceProblems } from '../../nouns/reference-impedance';
@@ -149,19 +149,19 @@ function compute({ elements, reference_impedance_ohm, termination: closedBy, inc
     const z2 = space.constant(reference2);
     const waves = scattering(space, two, z1, z2);
 
-    const rounding = vanishing * elements.length;
+    const rounding = roundingOfEntries(space, two, waves, z1, z2);
     const factorMagnitude = magnitudes(space, two.factor);
-    const blocked = (index: number) => factorMagnitude[index] <= rounding * two.factorSize[index];
+    const blocked = (index: number) => factorMagnitude[index] === 0;
     const gone = (name: 'b' | 'c') => {
       const magnitude = magnitudes(space, two[name]);
-      return (index: number) => magnitude[index] <= rounding * two.size[name][index];
+      return (index: number) => magnitude[index] <= vanishing * rounding[name][index];
     };
 
     const closed = closedBy === undefined ? impedance(space, reference2) : terminationOnePort(space, closedBy, frequencies, omega, space.column(z2));
     const V = two.a.mul(closed.v).add(two.b.mul(closed.i));
     const I = two.c.mul(closed.v).add(two.d.mul(closed.i));
     const currentSize = magnitudes(space, I);
-    const currentScale = two.size.c.map((each, index) => each * closed.vScale[index] + two.size.d[index] * closed.iScale[index]);
+    const currentScale = rounding.c.map((each, index) => each * closed.vScale[index] + rounding.d[index] * closed.iScale[index]);
     const atReference = reflection(space, two.a.mul(z2).add(two.b), two.c.mul(z2).add(two.d), z1);
 
     const s21 = withScale(two, space.column(waves.forward));
@@ -197,7 +197,7 @@ function compute({ elements, reference_impedance_ohm, termination: closedBy, inc
         ),
         t_order: tOrder,
       }),
-      input_impedance_ohm: columns.complex(space.column(V.div(I)), { pointer: '/input_impedance_ohm', code: 'pole', reason: 'no current enters, so the impedance is infinite' }, (index) => currentSize[index] <= rounding * currentScale[index]),
+      input_impedance_ohm: columns.complex(space.column(V.div(I)), { pointer: '/input_impedance_ohm', code: 'pole', reason: 'no current enters, so the impedance is infinite' }, (index) => currentSize[index] <= vanishing * currentScale[index]),
       insertion_loss_db: columns.real(insertionLossDb(space, two, waves), { pointer: '/insertion_loss_db', code: 'nothing_passes', reason: 'nothing passes, so the loss is infinite' }, blocked),
       return_loss_db: columns.real(returnLossDb(atReference), { pointer: '/return_loss_db', code: 'no_reflection', reason: 'nothing is reflected, so the return loss is infinite' }),
       group_delay_s: columns.real(delay, { pointer: '/group_delay_s', code: 'nothing_passes', reason: 'nothing passes, so there is no delay' }, blocked),

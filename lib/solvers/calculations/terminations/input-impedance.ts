@@ -5,7 +5,7 @@ import { line, lineConstants, type Line } from '../../lines/line';
 import { lineWarnings } from '../../lines/line-warnings';
 import { powerIntoLine } from '../../methods/line-power';
 import { lineTwoPort, telegrapherTwoPort } from '../../methods/line-two-port';
-import { impedanceColumn, lumpedImpedance, oddScaleOf } from '../../methods/one-port';
+import { impedanceColumn, lumpedImpedance, oddScaleOf, type OnePort } from '../../methods/one-port';
 import { powerWaves, reflection, returnLossDb, standingWaveRatio } from '../../methods/reflection';
 import { propagation } from '../../methods/telegrapher';
 import { complexColumn, frequencyColumn, nullableColumn } from '../../nouns/columns';
@@ -14,7 +14,7 @@ import { frequenciesHz, frequency, pointsOf } from '../../nouns/frequency';
 import { referenceImpedance, referenceProblems } from '../../nouns/reference-impedance';
 import { finiteColumn, ResultColumns } from '../../nouns/result-columns';
 import { termination, terminationOnePort, terminationProblems, type Termination } from '../../nouns/termination';
-import { inSpaceOf, magnitudes } from '../../numeric/phasor';
+import { inSpaceOf, magnitudes, type Phasor, type Space } from '../../numeric/phasor';
 
 const input = z
   .strictObject({
@@ -120,8 +120,7 @@ function compute(given: Line, lengthM: number, closedBy: Termination, frequencie
     const noCurrent = (index: number) => sizeI[index] <= vanishing * (shuntScale[index] * load.vScale[index] + evenScale[index] * load.iScale[index]);
 
     const own = impedanceColumn(space, Zc.re, Zc.im, Zc.infinite);
-    const forward = load.v.mul(own.i).add(own.v.mul(load.i));
-    const atTermination = load.v.mul(own.i).sub(own.v.mul(load.i)).div(forward);
+    const atTermination = farReflection(space, load, own, closedBy === 'matched');
     const power = powerIntoLine(constants, waves, lengthM, space.column(load.v), space.column(load.i));
     const atReference = reflection(space, V, I, space.constant(complexParts(referenceOhm)), power);
     return {
@@ -137,4 +136,20 @@ function compute(given: Line, lengthM: number, closedBy: Termination, frequencie
     };
   });
   return { result, warnings: columns.warnings };
+}
+
+/**
+ * (ZL - Zc)/(ZL + Zc) with ZL = v/i and Zc in the same form. The trap: at direct current Zc may be infinite or 0, and so may ZL; both
+ * terms of the sum vanish, and the limit from above is 1 for an open, -1 for a short, and 0 for the line's own impedance.
+ */
+function farReflection<T extends Phasor<T>>(space: Space<T>, load: OnePort<T>, own: OnePort<T>, isMatched: boolean): T {
+  if (isMatched) return space.constant(0);
+  const fromVoltage = load.v.mul(own.i);
+  const fromCurrent = own.v.mul(load.i);
+  const vanishes = (value: T) => Uint8Array.from(magnitudes(space, value), (each) => (each === 0 ? 1 : 0));
+  const noVoltage = vanishes(fromVoltage);
+  const noCurrent = vanishes(fromCurrent);
+  const isLimit = noVoltage.map((each, index) => each & noCurrent[index]);
+  const limit = space.pick(vanishes(load.i), space.constant(1), space.constant(-1));
+  return space.pick(isLimit, limit, fromVoltage.sub(fromCurrent).div(fromVoltage.add(fromCurrent)));
 }

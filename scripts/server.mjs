@@ -48,17 +48,23 @@ const server = http.createServer(
 // ---------------------------------------------------------------------------------------------------
 // Requests
 
-function setRight(request) {
-  const { headers } = request;
-  for (const name of Object.keys(headers)) {
-    const isOurs = name.startsWith('x-linewright-') || name.startsWith('x-middleware-');
-    if (isOurs || (!trustsProxy && (name.startsWith('x-forwarded-') || name === 'forwarded'))) delete headers[name];
-  }
-  if (!trustsProxy && request.socket.remoteAddress) headers['x-forwarded-for'] = request.socket.remoteAddress;
+/** What we and the framework's parts say to one another, and nobody else may. */
+const internalFields = /^x-(linewright|middleware)-/;
+/** What a proxy says, believed only when there is one. */
+const proxyFields = /^(x-forwarded-|forwarded$)/;
+/** How the framework's pages ask for parts of themselves; in the API it would redirect them. */
+const pageFields = /^(rsc$|next-|x-nextjs-|x-matched-path$|x-invoke-|x-now-)/;
 
+function setRight(request) {
   // A request line may hold the whole URL; whose name it gives is no matter here.
   request.url = request.url.replace(/^https?:\/\/[^/?#]*(?=[/?#]|$)/i, '') || '/';
   const isApi = isUnderApi(request.url);
+  const { headers } = request;
+  for (const name of Object.keys(headers)) {
+    if (internalFields.test(name) || (!trustsProxy && proxyFields.test(name)) || (isApi && pageFields.test(name))) delete headers[name];
+  }
+  if (!trustsProxy && request.socket.remoteAddress) headers['x-forwarded-for'] = request.socket.remoteAddress;
+
   // A path that no page can have is led to where every unknown path is answered: 404, in the shape of its place.
   if (!isReadable(request.url, isApi)) request.url = isApi ? '/api/unreadable-path' : '/unreadable-path';
   // The framework answers an unknown method with an empty 500; the API's own routes know what is allowed.

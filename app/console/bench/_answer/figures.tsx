@@ -1,14 +1,14 @@
 import { Figure, Figures } from '@/app/_components/figure';
 import { figuresOf } from './figures-of';
 import type { ResultPart } from './result-view';
-import { exactAt, showAt } from './show-value';
+import { exactAt, showAt, showPlace } from './show-value';
 
 /** The answer at a glance: at the cursor where there is a sweep. */
 export function PartFigures({ part, index }: { readonly part: ResultPart; readonly index: number }) {
   const figures = figuresOf(part);
   if (figures.length === 0) return null;
   const { axis } = part;
-  const atAxis = axis && figures.some(({ single }) => !single) ? showAt(axis, index, 6) : null;
+  const atAxis = axis && figures.some(({ single }) => !single) ? showPlace(axis, index) : null;
   return (
     <div>
       {atAxis && (

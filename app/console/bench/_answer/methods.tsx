@@ -19,6 +19,6 @@ export function Methods({ methods }: { readonly methods: readonly MethodUse[] })
 }
 
 function sentence(text: string): string {
-  const trimmed = text.trim();
+  const trimmed = text.trim().replace(/^[a-z](?=[a-z]+[ ;,])/, (letter) => letter.toUpperCase());
   return /[.!?]$/.test(trimmed) ? trimmed : `${trimmed}.`;
 }

@@ -40,7 +40,7 @@ export function PartView({ part, nested = false }: { readonly part: ResultPart; 
           <CodeBlock code={text} label={title} tall />
         </section>
       ))}
-      {!nested && part.absent.length > 0 && <p className="text-fine text-ash">Not part of this answer: {part.absent.map((title) => title.toLowerCase()).join(', ')}.</p>}
+      {!nested && part.absent.length > 0 && <p className="text-fine text-ash">Not part of this answer: {part.absent.join(', ')}.</p>}
     </div>
   );
 }

@@ -7,7 +7,7 @@ import { Cell, HeaderCell, Row, Table, TableFrame } from '@/app/_components/tabl
 import { formatCount } from '@/app/_format/numbers';
 import type { Cursor } from '../_plot/cursor';
 import { csvOf, download, fileName } from '../_plot/save';
-import { cellColumnsOf } from './cells';
+import { cellColumnsOf, type CellColumn } from './cells';
 import type { ResultPart } from './result-view';
 import { lengthOf } from './quantity-of-result';
 
@@ -20,6 +20,8 @@ export function ResultTable({ part, cursor }: { readonly part: ResultPart; reado
   const length = Math.max(0, ...quantities.map(lengthOf));
   const rows = useMemo(() => Array.from({ length }, (_, index) => index), [length]);
   const definitions = useMemo(() => cellColumnsOf(quantities).map(definitionOf), [quantities]);
+  // The table's own functions change with its state; nothing here keeps one across renders.
+  // eslint-disable-next-line react-hooks/incompatible-library
   const table = useReactTable({
     data: rows,
     columns: definitions,
@@ -80,8 +82,14 @@ export function ResultTable({ part, cursor }: { readonly part: ResultPart; reado
   );
 }
 
-function definitionOf({ id, title, numeric, cell }: ReturnType<typeof cellColumnsOf>[number]): ColumnDef<number> {
-  return { id, header: title, meta: { numeric }, cell: ({ row }) => cell(row.original) };
+function definitionOf({ id, title, unit, numeric, cell }: CellColumn): ColumnDef<number> {
+  const header = () => (
+    <>
+      {title}
+      {unit && <span className="ml-1.5 font-mono font-normal">{unit}</span>}
+    </>
+  );
+  return { id, header, meta: { numeric }, cell: ({ row }) => cell(row.original) };
 }
 
 function Turn({ disabled, onClick, children }: { readonly disabled: boolean; readonly onClick: () => void; readonly children: string }) {

@@ -57,7 +57,9 @@ function collect(reader: SchemaReader, schema: JsonSchema, value: unknown, point
     const content = (value as Record<string, unknown>)[name];
     const title = inner.title ?? name.replaceAll('_', ' ');
     const place = `${pointer}/${name}`;
-    if (content === undefined || (content === null && !isNumeric(inner)) || (Array.isArray(content) && content.length === 0)) {
+    if (content === undefined || (Array.isArray(content) && content.length === 0)) {
+      continue;
+    } else if (content === null && !isNumeric(inner)) {
       draft.absent.push(title);
     } else if (typeof content === 'string' && content.includes('\n')) {
       draft.texts.push({ title, pointer: place, text: content });

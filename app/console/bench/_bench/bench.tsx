@@ -1,6 +1,6 @@
 'use client';
 
-import { useEffect, useRef, useState, type KeyboardEvent } from 'react';
+import { useEffect, useRef, useState, type KeyboardEvent, type SyntheticEvent } from 'react';
 import { FormProvider } from 'react-hook-form';
 import { Button } from '@/app/_components/button';
 import { PageTitle } from '@/app/_components/page-title';
@@ -28,11 +28,13 @@ function CalculationBench({ calculation }: { readonly calculation: Calculation }
   const current = useCurrentInput(calculation, field, form);
   const call = useCall(calculation, field, form);
   const opened = useRef(false);
+  const answer = useRef<HTMLElement>(null);
 
   useEffect(() => {
     // Once: later changes of the fragment are this page's own.
-    if (opened.current || window.location.hash === '') return;
+    if (opened.current) return;
     opened.current = true;
+    if (window.location.hash === '') return;
     void decodeInput(window.location.hash).then((input) => {
       if (input === undefined) return setOrigin('unreadable link');
       load(input);
@@ -40,15 +42,21 @@ function CalculationBench({ calculation }: { readonly calculation: Calculation }
     });
   }, [load]);
 
-  const run = form.handleSubmit(async ({ input }) => {
+  async function send({ input }: { input: unknown }) {
     window.history.replaceState(null, '', `#${await encodeInput(input)}`);
     await call.send(input);
-  });
+    // Below the form the answer would arrive out of sight.
+    if (window.matchMedia('(width < 64rem)').matches) answer.current?.scrollIntoView({ block: 'start' });
+  }
+
+  function run(event?: SyntheticEvent) {
+    void form.handleSubmit(send)(event);
+  }
 
   function onKeyDown(event: KeyboardEvent) {
     if (event.key !== 'Enter' || !(event.ctrlKey || event.metaKey)) return;
     event.preventDefault();
-    void run();
+    run();
   }
 
   function loadExample(index: number) {
@@ -61,7 +69,7 @@ function CalculationBench({ calculation }: { readonly calculation: Calculation }
       <PageTitle title={calculation.title}>{calculation.summary}</PageTitle>
       <div className="grid grid-cols-[minmax(0,1fr)] items-start gap-x-10 gap-y-10 lg:grid-cols-[352px_minmax(0,1fr)]">
         <FormProvider {...form}>
-          <form noValidate aria-label={calculation.title} onSubmit={(event) => void run(event)} onKeyDown={onKeyDown}>
+          <form noValidate aria-label={calculation.title} onSubmit={run} onKeyDown={onKeyDown} className="[&_:is(input,select,textarea)]:scroll-mb-24">
             <ExplainSwitch>
               {(explainSwitch) => (
                 <>
@@ -74,15 +82,18 @@ function CalculationBench({ calculation }: { readonly calculation: Calculation }
                 </>
               )}
             </ExplainSwitch>
-            <div className="mt-6 flex flex-wrap items-center gap-x-3 gap-y-1">
+            <div className="sticky bottom-0 mt-4 flex flex-wrap items-center gap-x-3 gap-y-1 border-t border-rule bg-paper py-3">
               <Button type="submit" busy={call.state === 'waiting'}>
                 Calculate
               </Button>
-              <small className="text-fine text-ash">{current.cost} · Ctrl Enter</small>
+              <small className="text-fine text-ash">
+                {current.cost}
+                <span className="hidden sm:inline"> · Ctrl Enter</span>
+              </small>
             </div>
           </form>
         </FormProvider>
-        <AnswerColumn calculation={calculation} path={calculationPath(calculation)} call={call} current={current.input} onRetry={() => void run()} />
+        <AnswerColumn ref={answer} calculation={calculation} path={calculationPath(calculation)} call={call} current={current.input} onRetry={() => run()} />
       </div>
     </>
   );

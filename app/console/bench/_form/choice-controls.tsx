@@ -42,7 +42,7 @@ export function BooleanControl(props: ControlProps<BooleanField>) {
 
 /** A box a word. Where none was ever touched the request leaves the list out, and the default stands. */
 export function ChoicesControl(props: ControlProps<ChoicesField>) {
-  const { field, className = '' } = props;
+  const { field, className = '', labelHidden } = props;
   const { bound, error, help } = useControl(props);
   const chosen: readonly string[] = bound.value ?? (Array.isArray(field.default) ? field.default : []);
 
@@ -51,7 +51,8 @@ export function ChoicesControl(props: ControlProps<ChoicesField>) {
   }
 
   return (
-    <div role="group" aria-label={field.title} aria-description={field.description} className={className}>
+    <div role="group" aria-label={field.title} className={className}>
+      {!labelHidden && <p className="mb-[5px] text-small font-[550]">{field.title}</p>}
       <div className="flex flex-wrap gap-x-5 gap-y-1.5">
         {field.options.map((option, index) => (
           <CheckboxField

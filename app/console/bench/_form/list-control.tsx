@@ -2,21 +2,23 @@
 
 import { useFieldArray, useFormContext } from 'react-hook-form';
 import { useControl, type ControlProps } from './control';
-import type { ListField } from './field';
+import type { Field, ListField } from './field';
 import { FieldView } from './field-view';
 import { startingValues } from './form-values';
+import { UnionControl } from './union-control';
 
 /** Entries in order, between two conductors that run down the side as the chain itself does. */
 export function ListControl(props: ControlProps<ListField>) {
   const { field, path, className = '' } = props;
   const { bound, error, help } = useControl(props);
+  const { ref, name } = bound;
   const { setValue } = useFormContext();
   const { fields: entries, append, remove, move } = useFieldArray({ name: `${path}.items` });
   const item = field.item();
   const fixed = field.least === field.most;
 
   function add() {
-    setValue(bound.name, true);
+    setValue(name, true);
     append({ value: startingValues(item) }, { shouldFocus: false });
   }
 
@@ -35,12 +37,12 @@ export function ListControl(props: ControlProps<ListField>) {
                 </span>
               )}
             </div>
-            <FieldView field={item} path={`${path}.items.${index}.value`} label={item.kind === 'union' ? 'Kind' : `${field.title} ${index + 1}`} labelHidden={item.kind === 'union'} />
+            <Entry field={item} path={`${path}.items.${index}.value`} title={`${field.title} ${index + 1}`} />
           </li>
         ))}
       </ol>
       {!fixed && entries.length < field.most && (
-        <button type="button" ref={bound.ref} onClick={add} className="mt-3 rounded-field border border-edge px-3 py-1 text-small hover:bg-wash">
+        <button type="button" ref={ref} onClick={add} className="mt-3 rounded-field border border-edge px-3 py-1 text-small hover:bg-wash">
           Add
         </button>
       )}
@@ -51,6 +53,12 @@ export function ListControl(props: ControlProps<ListField>) {
       )}
     </div>
   );
+}
+
+/** Its number has named it; what remains to say of a union is which kind. */
+function Entry({ field, path, title }: { readonly field: Field; readonly path: string; readonly title: string }) {
+  if (field.kind === 'union') return <UnionControl field={field} path={path} label={`Kind of ${title.toLowerCase()}`} labelHidden bare />;
+  return <FieldView field={field} path={path} label={title} labelHidden={field.kind !== 'group'} />;
 }
 
 function Step({ label, sign, disabled, onClick }: { readonly label: string; readonly sign: string; readonly disabled: boolean; readonly onClick: () => void }) {

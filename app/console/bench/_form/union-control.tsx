@@ -17,7 +17,7 @@ interface UnionControlProps extends ControlProps<UnionField> {
 /** A choice of kinds, and the fields of the chosen one beneath it. */
 export function UnionControl({ bare = false, ...props }: UnionControlProps) {
   const { field, path, className = '' } = props;
-  const { bound, error, label, help, description } = useControl({ ...props, label: bare ? 'Kind' : props.label });
+  const { bound, error, label, help, description } = useControl({ ...props, label: props.label ?? (bare ? 'Kind' : undefined) });
   const { getValues, setValue } = useFormContext();
   const variant = field.variants.find(({ key }) => key === bound.value);
   const inner = variant?.field();

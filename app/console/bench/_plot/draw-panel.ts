@@ -2,6 +2,7 @@
 import { axisX, axisY, gridX, gridY, line, plot, ruleY } from '@observablehq/plot';
 import { significant } from '@/app/_format/numbers';
 import { shownUnit } from '@/lib/quantities/write-quantity';
+import { withoutTrailingZeros } from '../_answer/show-value';
 import { lineStyles } from './line-styles';
 import type { Panel } from './panels';
 import { reducedIndices } from './reduce';
@@ -37,10 +38,14 @@ export function drawPanel({ panel, axis, axisTitle, x, y, frame, labelled }: Pan
   const columns = Math.max(1, frame.width - margins.left - right);
   const position = axis.map((value) => placeOn(x, value));
   const ticks = { x: Math.max(2, Math.floor(columns / 78)), y: Math.max(3, Math.floor(frame.height / 46)) };
+  const verticalTicks = panel.unit === '°' ? angleTicks(y) : y.logarithmic ? labelledDecades(y, ticks.y) : ticks.y;
   const traces = panel.traces.map(({ label, values }, index) => ({
     label,
     style: lineStyles[index],
-    points: reducedIndices(position, values, columns).map((at) => ({ x: axis[at] / x.divisor, y: values[at] === null ? NaN : values[at]! / y.divisor })),
+    points: withoutJumps(
+      reducedIndices(position, values, columns).map((at) => ({ x: axis[at] / x.divisor, y: values[at] === null ? NaN : values[at]! / y.divisor })),
+      y,
+    ),
   }));
   const svg = plot({
     ...frame,
@@ -53,12 +58,12 @@ export function drawPanel({ panel, axis, axisTitle, x, y, frame, labelled }: Pan
     x: { type: x.logarithmic ? 'log' : 'linear', domain: x.domain.map((each) => each / x.divisor) },
     y: { type: y.logarithmic ? 'log' : 'linear', domain: y.domain.map((each) => each / y.divisor), nice: !y.clipped && panel.unit !== '°' },
     marks: [
-      gridX({ ticks: ticks.x, stroke: 'var(--rule)', strokeOpacity: 1 }),
-      gridY({ ticks: panel.unit === '°' ? angleTicks(y) : ticks.y, stroke: 'var(--rule)', strokeOpacity: 1 }),
+      gridX({ ticks: x.logarithmic ? decadeTicks(x, 9) : ticks.x, stroke: 'var(--rule)', strokeOpacity: 1 }),
+      gridY({ ticks: verticalTicks, stroke: 'var(--rule)', strokeOpacity: 1 }),
       ...(y.domain[0] < 0 && y.domain[1] > 0 ? [ruleY([0], { stroke: 'var(--edge)' })] : []),
       ...traces.map(({ points, style }) => line(points, { x: 'x', y: 'y', stroke: style.colour, strokeWidth: 1.9, strokeDasharray: style.dash, strokeLinejoin: 'round', clip: true })),
-      axisX({ ticks: ticks.x, tickSize: 0, tickPadding: 8, label: titled(axisTitle, x.unit), labelArrow: 'none', labelAnchor: 'right', labelOffset: 36, tickFormat: formatOf(x) }),
-      axisY({ ticks: panel.unit === '°' ? angleTicks(y) : ticks.y, tickSize: 0, tickPadding: 8, label: y.unit || null, labelArrow: 'none', labelAnchor: 'top', labelOffset: margins.left - 4, tickFormat: formatOf(y) }),
+      axisX({ ticks: x.logarithmic ? labelledDecades(x, ticks.x) : ticks.x, tickSize: 0, tickPadding: 8, label: titled(axisTitle, x.unit), labelArrow: 'none', labelAnchor: 'right', labelOffset: 36, tickFormat: formatOf(x) }),
+      axisY({ ticks: verticalTicks, tickSize: 0, tickPadding: 8, label: y.unit || null, labelArrow: 'none', labelAnchor: 'top', labelOffset: margins.left - 4, tickFormat: formatOf(y) }),
     ],
   }) as SVGSVGElement & { scale(name: string): { apply(value: number): number } | undefined };
   const [horizontal, vertical] = [svg.scale('x')!, svg.scale('y')!];
@@ -67,13 +72,25 @@ export function drawPanel({ panel, axis, axisTitle, x, y, frame, labelled }: Pan
   return drawn;
 }
 
+interface Point {
+  readonly x: number;
+  readonly y: number;
+}
+
+/** From beyond one edge to beyond the other within a step is a pole between two points, not a line. */
+function withoutJumps(points: readonly Point[], { domain: [least, most], divisor, clipped }: Scale): Point[] {
+  if (!clipped) return [...points];
+  const side = ({ y }: Point) => (y * divisor > most ? 1 : y * divisor < least ? -1 : 0);
+  return points.flatMap((point, index) => (index > 0 && side(point) * side(points[index - 1]) < 0 ? [{ x: point.x, y: NaN }, point] : [point]));
+}
+
 function labelEnds({ svg }: DrawnPanel, x: number, ends: readonly { label: string; colour: string; y: number }[]): void {
   let above = -Infinity;
   for (const { label, colour, y } of ends.toSorted((a, b) => a.y - b.y)) {
     above = Math.max(Math.min(Math.max(y, margins.top), Number(svg.getAttribute('height')) - margins.bottom), above + 14);
     const element = document.createElementNS('http://www.w3.org/2000/svg', 'text');
     element.textContent = label;
-    for (const [name, value] of Object.entries({ x: x + 6, y: above, dy: '0.32em', fill: colour, 'font-size': 12, 'font-weight': 600 })) element.setAttribute(name, String(value));
+    for (const [name, value] of Object.entries({ x: x + 6, y: above, dy: '0.32em', fill: colour, 'font-size': 12, 'font-weight': 600, 'text-anchor': 'start' })) element.setAttribute(name, String(value));
     svg.append(element);
   }
 }
@@ -104,7 +121,28 @@ function formatOf({ logarithmic, unit }: Scale): (value: number) => string {
 }
 
 function plainTick(value: number): string {
-  return value === 0 ? '0' : significant(Number(value.toPrecision(6)), 6).replace(/(\.\d*?)0+$/, '$1').replace(/\.$/, '');
+  return value === 0 ? '0' : withoutTrailingZeros(significant(Number(value.toPrecision(6)), 6));
+}
+
+/** The first `within` multiples of each power of ten: 9 for all lines of a decade, 1 for its start. */
+function decadeTicks({ domain: [from, to], divisor }: Scale, within: number, steps: readonly number[] = [1, 2, 3, 4, 5, 6, 7, 8, 9]): number[] {
+  const ticks = [];
+  for (let exponent = Math.floor(Math.log10(from / divisor)); exponent <= Math.log10(to / divisor); exponent++) {
+    for (const step of steps.slice(0, within)) {
+      const tick = step * 10 ** exponent;
+      if (tick >= (from / divisor) * (1 - 1e-9) && tick <= (to / divisor) * (1 + 1e-9)) ticks.push(tick);
+    }
+  }
+  return ticks;
+}
+
+/** As many as there is room for: 1, 2 and 5 of each decade, its start alone, or of every few decades. */
+function labelledDecades(scale: Scale, room: number): number[] {
+  const fine = decadeTicks(scale, 3, [1, 2, 5]);
+  if (fine.length <= room) return fine;
+  const starts = decadeTicks(scale, 1);
+  const every = Math.ceil(starts.length / room);
+  return starts.filter((_, index) => index % every === 0);
 }
 
 function angleTicks({ domain: [from, to] }: Scale): number[] {

@@ -54,7 +54,8 @@ export function PanelPlot({ panel, axis, cursor, onDrawn }: PanelPlotProps) {
     cursor.moveTo(nearestIndex(pixels, event.clientX - event.currentTarget.getBoundingClientRect().left));
   }
 
-  const reading = panel.traces.map(({ label, values }) => ({ label, ...showReal(values[cursor.index], panel.unit, 6) }));
+  const noise = 1e-12 * Math.max(Math.abs(y.domain[0]), Math.abs(y.domain[1]));
+  const reading = panel.traces.map(({ label, values }) => ({ label, ...showReal(settled(values[cursor.index], noise), panel.unit, 6) }));
   const at = exactAt(axis, cursor.index);
   return (
     <div ref={frame} className="min-w-0">
@@ -92,6 +93,11 @@ export function PanelPlot({ panel, axis, cursor, onDrawn }: PanelPlotProps) {
       {y.clipped && <p className="pl-[52px] text-fine text-ash">Peaks beyond this range are cut off; the table has them.</p>}
     </div>
   );
+}
+
+/** Against its neighbours on the plot a value of this size is zero and rounding. */
+function settled(value: number | null, noise: number): number | null {
+  return value !== null && Math.abs(value) < noise ? 0 : value;
 }
 
 interface CursorMarksProps {

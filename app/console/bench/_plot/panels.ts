@@ -34,7 +34,7 @@ export function plotGroupsOf(columns: readonly Quantity[]): PlotGroup[] {
   // A schema without hints still deserves a plot of what it calls its figures.
   const isWanted = columns.some(({ plot }) => plot !== undefined) ? ({ plot }: Quantity) => plot === 'rectangular' : ({ figure }: Quantity) => figure !== undefined;
   for (const column of columns) {
-    if (column.kind === 'word' || !isWanted(column)) continue;
+    if (column.kind === 'word' || !isWanted(column) || column.re.every((value) => value === null)) continue;
     const id = `${column.plotGroup ?? column.pointer} ${column.unit} ${column.kind}`;
     groups.set(id, [...(groups.get(id) ?? []), column]);
   }

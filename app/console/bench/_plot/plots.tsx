@@ -77,7 +77,7 @@ function Chart({ title, quantities, axis, cursor }: { readonly title: string; re
     drawing.current = svg;
   }, []);
   return (
-    <figure className="min-w-0">
+    <figure className="max-w-[17rem] min-w-0">
       <figcaption className="mb-1 flex flex-wrap items-baseline gap-x-4 text-small">
         <span className="font-[550]">{title}</span>
         <SaveLinks

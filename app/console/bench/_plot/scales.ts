@@ -29,6 +29,8 @@ export function axisScale(values: readonly number[], unit: string): Scale {
 
 /** Beyond this many times what nearly all values keep to, the rest is a pole. */
 const poleRatio = 6;
+/** No instrument and no reader tells a level or an angle this small from zero. */
+const leastLevel = 1e-9;
 /** Over more than three decades a linear axis shows the last only. */
 const wide = 1000;
 
@@ -44,15 +46,20 @@ export function valueScale(traces: readonly (readonly Entry[])[], unit: string, 
   const reach = Math.max(high - low, Math.abs(high) / 100, Number.MIN_VALUE);
   const lower = least < low - poleRatio * reach ? low - reach : least;
   const upper = most > high + poleRatio * reach ? high + reach : most;
+  const isLevel = unit === 'dB' || unit === '°';
+  if (isLevel && Math.max(-lower, upper) < leastLevel) return { domain: [-1, 1], logarithmic: false, clipped: false, unit, divisor: 1 };
   const domain = unit === '°' && upper - lower > 180 ? ([-180, 180] as const) : padded(lower, upper);
   return { domain, logarithmic: false, clipped: lower > least || upper < most, ...multiple(Math.max(Math.abs(domain[0]), Math.abs(domain[1])), unit) };
 }
+
+/** Of any unit, in decibels and degrees above all: rounding around zero. */
+const nothing = 1e-30;
 
 /** A constant gets room on both sides; zero is kept on the plot where the values come near it. */
 function padded(lower: number, upper: number): readonly [number, number] {
   const size = Math.max(Math.abs(lower), Math.abs(upper));
   // Differences in the last digits are rounding, and would be drawn as mountains.
-  if (upper - lower <= 1e-9 * size) return size === 0 ? [-1, 1] : [Math.min(0, 1.5 * lower), Math.max(0, 1.5 * upper)];
+  if (upper - lower <= 1e-9 * size || size < nothing) return size < nothing ? [-1, 1] : [Math.min(0, 1.5 * lower), Math.max(0, 1.5 * upper)];
   const margin = (upper - lower) / 16;
   const from = lower >= 0 && lower < (upper - lower) / 2 ? 0 : lower - margin;
   const to = upper <= 0 && -upper < (upper - lower) / 2 ? 0 : upper + margin;

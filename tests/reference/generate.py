@@ -247,6 +247,11 @@ def scattering(case, omega):
 def cascade(case):
     omega = 2 * mp.pi * exact(case["frequency_hz"])
     answer = scattering(case, omega)
+    given = case.get("reference_impedance_ohm", 50)
+    z1 = complex_of(given[0] if isinstance(given, list) else given)
+    s11 = answer["/s/s11"]
+    if abs(1 - s11) > mp.mpf(10) ** -40:
+        answer["/input_impedance_ohm"] = (mp.conj(z1) + s11 * z1) / (1 - s11)
     if answer["/s/s21"] != 0:
         answer["/insertion_loss_db"] = -20 * mp.log10(abs(answer["/s/s21"]))
         if omega:
@@ -316,6 +321,7 @@ def cases():
         ("direct current stopped by a capacitor", [{"kind": "series", "capacitance_f": 1e-9}, {"kind": "shunt", "resistance_ohm": 200}], 0, 50),
         ("electrically tiny", [{"kind": "line", "line": CABLE, "length_m": 1e-8}, {"kind": "line", "line": LOSSY, "length_m": 1e-8}], 1e6, 50),
         ("twelve sections", [{"kind": "line", "line": SEVENTY if k % 2 else CABLE, "length_m": 0.05 + 0.01 * k} for k in range(12)], 9e8, 50),
+        ("twelve long cables", [{"kind": "line", "line": SEVENTY if k % 2 else FIFTY, "length_m": 0.5 + 0.03 * k} for k in range(12)], 1e9, 50),
         ("RC line on a chip", [{"kind": "series", "resistance_ohm": 200}, {"kind": "line", "line": ON_CHIP, "length_m": 3e-3}, {"kind": "shunt", "capacitance_f": 3e-14}], 5e9, 50),
     ]
     for name, elements, frequency, reference in chains:

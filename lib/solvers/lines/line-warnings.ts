@@ -31,3 +31,19 @@ function inHertz(frequencyHz: number): string {
   const step = Math.max(0, Math.min(prefixes.length - 1, Math.floor(Math.log10(frequencyHz) / 3)));
   return `${Number((frequencyHz / 1000 ** step).toPrecision(6))} ${prefixes[step]}Hz`;
 }
+
+/** Beyond these radians the rounding of the phase alone, some 1e-15 of it, is more than the stated accuracy. */
+const mostTurn = 1000;
+
+/** `turns`: by how many radians the phase turns, at each frequency. */
+export function turnWarnings(turns: Float64Array, pointer: string): Warning[] {
+  const most = turns.reduce((largest, each) => Math.max(largest, each), 0);
+  if (most <= mostTurn) return [];
+  return [
+    {
+      code: 'many_turns',
+      pointer,
+      detail: `the phase turns by up to ${most.toPrecision(3)} rad, and a number of 16 digits knows it to ${(most * 2e-15).toPrecision(1)} rad; what depends on the phase is no better`,
+    },
+  ];
+}

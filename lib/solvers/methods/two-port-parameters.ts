@@ -18,7 +18,7 @@ export const twoPortConversion: Method = {
   title: 'Conversion between ABCD, S, Z, Y and T',
   source: 'Frickey, Conversions between S, Z, Y, h, ABCD and T parameters, IEEE Trans. MTT-42 (1994) 205-211, with Marks and Williams, MTT-43 (1995) 914-915 on its waves (from memory, checked by nodal analysis)',
   range: 'reference impedances with a positive real part; a representation that does not exist is null',
-  accuracy: 'exact; 1e-12 relative in float64',
+  accuracy: 'exact; in float64 S to 1e-12 of a whole wave and losses to 1e-12 of themselves or 1e-14 dB',
 };
 
 /** How T is ordered, in words: two orders are in use. */

@@ -3,7 +3,7 @@ import { defineCalculation, type Method } from '../../calculation';
 import { element, elementProblems, type Element } from '../../elements/element';
 import { elementTwoPort } from '../../elements/element-two-port';
 import { ImpossibleInput, type InputProblem } from '../../errors';
-import { lineWarnings } from '../../lines/line-warnings';
+import { lineWarnings, turnWarnings } from '../../lines/line-warnings';
 import { telegrapherTwoPort } from '../../methods/line-two-port';
 import { impedance, lumpedImpedance } from '../../methods/one-port';
 import { powerWaves, reflection, returnLossDb } from '../../methods/reflection';
@@ -88,11 +88,11 @@ export const cascade = defineCalculation({
       ...sizeProblems(given.elements.length, frequencies.length),
     ]);
     const columns = new ResultColumns();
-    const result = compute(given, frequencies, columns);
+    const { result, turns } = compute(given, frequencies, columns);
     return {
       result,
       methods: methodsOf(given.elements).map((method) => ({ method, inRange: true })),
-      warnings: [...columns.warnings, ...given.elements.flatMap((each, index) => ('line' in each ? lineWarnings(each.line, frequencies, `/elements/${index}/line`) : []))].slice(0, 100),
+      warnings: [...columns.warnings, ...turnWarnings(turns, '/elements'), ...given.elements.flatMap((each, index) => ('line' in each ? lineWarnings(each.line, frequencies, `/elements/${index}/line`) : []))].slice(0, 100),
     };
   },
   examples: [
@@ -171,7 +171,7 @@ function compute({ elements, reference_impedance_ohm, termination: closedBy, inc
     const noPassage = 'so little passes that the value is not finite';
     const wanted = new Set(include);
 
-    return {
+    const result = {
       frequency_hz: finiteColumn(frequencies),
       ...(wanted.has('abcd') && {
         abcd: named(['a', 'b', 'c', 'd'], Object.values(mapFour({ a: two.a, b: two.b, c: two.c, d: two.d }, (each) => withoutScale(two, space.column(each.div(two.factor))))), (name, column) =>
@@ -204,6 +204,7 @@ function compute({ elements, reference_impedance_ohm, termination: closedBy, inc
       reciprocal: true,
       passive: isPassive(s11, s21, s22),
     };
+    return { result, turns: two.roundings };
   });
 }
 

@@ -2,7 +2,7 @@ import { z } from 'zod';
 import { defineCalculation } from '../../calculation';
 import { ImpossibleInput } from '../../errors';
 import { line, lineConstants, type Line } from '../../lines/line';
-import { lineWarnings } from '../../lines/line-warnings';
+import { lineWarnings, turnWarnings } from '../../lines/line-warnings';
 import { powerIntoLine } from '../../methods/line-power';
 import { lineTwoPort, telegrapherTwoPort } from '../../methods/line-two-port';
 import { impedanceColumn, lumpedImpedance, oddScaleOf, type OnePort } from '../../methods/one-port';
@@ -104,6 +104,7 @@ function compute(given: Line, lengthM: number, closedBy: Termination, frequencie
   const waves = propagation(constants, frequencies);
   const { omega, characteristicImpedance: Zc } = waves;
   const columns = new ResultColumns();
+  const turns = waves.phaseRadPerM.map((each) => each * lengthM);
   const result = inSpaceOf(frequencies.length, (space) => {
     const two = lineTwoPort(space, constants, waves, lengthM);
     const load = terminationOnePort(space, closedBy, frequencies, omega, Zc);
@@ -135,7 +136,7 @@ function compute(given: Line, lengthM: number, closedBy: Termination, frequencie
       return_loss_db: columns.real(returnLossDb(atReference), { pointer: '/return_loss_db', code: 'no_reflection', reason: 'nothing is reflected, so the return loss is infinite' }),
     };
   });
-  return { result, warnings: columns.warnings };
+  return { result, warnings: [...columns.warnings, ...turnWarnings(turns, '/length_m')] };
 }
 
 /**

@@ -69,6 +69,15 @@ export class ComplexColumn implements Phasor<ComplexColumn> {
     return result;
   }
 
+  scaledBy(factors: Float64Array): ComplexColumn {
+    const result = ComplexColumn.empty(this.length);
+    for (let index = 0; index < this.length; index++) {
+      result.re[index] = this.re[index] * factors[index];
+      result.im[index] = this.im[index] * factors[index];
+    }
+    return result;
+  }
+
   /** R. L. Smith, Algorithm 116, Communications of the ACM 5 (1962) 435: scaled by the larger part of the divisor. */
   div(other: ComplexColumn | number): ComplexColumn {
     if (typeof other === 'number') {

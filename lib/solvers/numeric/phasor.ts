@@ -54,11 +54,7 @@ function columnSpace(length: number): Space<ComplexColumn> {
     from: (re, im) => new ComplexColumn(re, im),
     constant: (value) => ComplexColumn.filled(length, value),
     column: (value) => value,
-    scale: (value, factors) =>
-      new ComplexColumn(
-        value.re.map((re, index) => re * factors[index]),
-        value.im.map((im, index) => im * factors[index]),
-      ),
+    scale: (value, factors) => value.scaledBy(factors),
     pick: (condition, whereTrue, whereFalse) => ComplexColumn.pick(condition, whereTrue, whereFalse),
   };
 }
@@ -70,13 +66,18 @@ export function inSpaceOf<Result>(length: number, formula: <T extends Phasor<T>>
 
 export function magnitudes<T extends Phasor<T>>(space: Space<T>, value: T): Float64Array {
   const { re, im } = space.column(value);
-  return re.map((_, index) => magnitude(re[index], im[index]));
+  const result = new Float64Array(re.length);
+  for (let index = 0; index < result.length; index++) result[index] = magnitude(re[index], im[index]);
+  return result;
 }
 
 /** |re + j im| that neither overflows nor underflows. */
 export function magnitude(re: number, im: number): number {
-  const [small, large] = Math.abs(re) < Math.abs(im) ? [Math.abs(re), Math.abs(im)] : [Math.abs(im), Math.abs(re)];
-  if (large === 0 || small === 0) return large;
+  const first = Math.abs(re);
+  const second = Math.abs(im);
+  const large = first < second ? second : first;
+  const small = first < second ? first : second;
+  if (small === 0) return large;
   const ratio = small / large;
   return large * Math.sqrt(1 + ratio * ratio);
 }

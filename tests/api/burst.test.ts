@@ -25,8 +25,10 @@ describe('a burst limit', () => {
       expect(Number(refused.headers['retry-after'])).toBeGreaterThanOrEqual(1);
       expect(Number(refused.headers['retry-after'])).toBeLessThanOrEqual(2);
     }
-    const refused = await oneUnitCall(secret);
-    if (refused.status === 429) await pause(Number(refused.headers['retry-after']) * 1000);
+    // What flowed in while the answers were looked at is used up first.
+    let refused = await oneUnitCall(secret);
+    while (refused.status === 200) refused = await oneUnitCall(secret);
+    await pause(Number(refused.headers['retry-after']) * 1000);
     expect((await oneUnitCall(secret)).status).toBe(200);
   });
 

@@ -1,6 +1,6 @@
 /** The engineer's story on the Bench: from a worked example to a number, a plot, a script and a line in the log. */
 import AxeBuilder from '@axe-core/playwright';
-import { chromium, type Browser, type Page } from 'playwright-core';
+import type { Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { figuresOf } from '@/app/console/bench/_answer/figures-of';
 import { resultView } from '@/app/console/bench/_answer/result-view';
@@ -8,34 +8,24 @@ import { showAt } from '@/app/console/bench/_answer/show-value';
 import { readerOf } from '@/app/console/bench/_form/json-schema';
 import { calculationPath, type Calculation } from '@/lib/solvers/calculation';
 import { calculations } from '@/lib/solvers/registry';
-import { createOrganization, type TestMember } from '@/tests/support/accounts';
+import { createOrganization, type TestMember } from '../support/accounts';
+import { serverUrl } from '../support/client';
+import { closeBrowser, newVisitor, type Visitor } from './visitor';
 
-const origin = process.env.LINEWRIGHT_URL!;
-const quiet = ['--no-sandbox', '--disable-gpu', '--disable-quic', '--no-first-run', '--disable-background-networking', '--disable-component-update', '--disable-sync'];
 const inputImpedance = '/console/bench/terminations/input-impedance';
 
-let browser: Browser;
 let engineer: TestMember;
+let visitor: Visitor;
 let page: Page;
 
 beforeAll(async () => {
-  browser = await chromium.launch({ executablePath: process.env.CHROMIUM_PATH ?? '/usr/bin/chromium', args: quiet });
   engineer = (await createOrganization()).members.engineer;
-  page = await signIn();
+  visitor = await newVisitor({ member: engineer });
+  await visitor.context.grantPermissions(['clipboard-read', 'clipboard-write']);
+  page = visitor.page;
 });
 
-afterAll(() => browser?.close());
-
-async function signIn(options: Parameters<Browser['newContext']>[0] = {}): Promise<Page> {
-  const context = await browser.newContext({ baseURL: origin, viewport: { width: 1280, height: 900 }, permissions: ['clipboard-read', 'clipboard-write'], ...options });
-  const fresh = await context.newPage();
-  await fresh.goto('/sign-in');
-  await fresh.getByLabel(/e-?mail/i).fill(engineer.email);
-  await fresh.getByLabel(/password/i).fill(engineer.password);
-  await fresh.getByRole('button', { name: /sign in/i }).click();
-  await fresh.waitForURL('**/console/**');
-  return fresh;
-}
+afterAll(closeBrowser);
 
 function pathOnBench(calculation: Calculation): string {
   return `/console/bench/${calculationPath(calculation)}`;
@@ -54,12 +44,12 @@ const answerOf = (on: Page) => on.getByRole('region', { name: 'Answer' });
 
 describe('an engineer on the Bench', () => {
   it('finds every calculation in the list', async () => {
-    await page.goto('/console/bench');
+    await visitor.open('/console/bench');
     for (const { title } of calculations) await expectVisible(page, title);
   });
 
   it.each(calculations.map((calculation) => [calculationPath(calculation), calculation] as const))('%s runs from its example and shows the numbers of the API', async (_, calculation) => {
-    await page.goto(pathOnBench(calculation));
+    await visitor.open(pathOnBench(calculation));
     const { result } = await calculate(page);
     const part = resultView(readerOf(calculation.output, 'output'), result);
     const shown = await answerOf(page).locator('dl').first().innerText();
@@ -71,7 +61,7 @@ describe('an engineer on the Bench', () => {
   });
 
   it('types a unit of their own, sees what it is, and the answer is out of date until it is run again', async () => {
-    await page.goto(inputImpedance);
+    await visitor.open(inputImpedance);
     await calculate(page);
     await page.getByLabel('Length', { exact: true }).fill('12 ft');
     await expectVisible(page, '3.6576 m');
@@ -83,7 +73,7 @@ describe('an engineer on the Bench', () => {
   });
 
   it('sees what is wrong in place of the help, from the form and from the solver', async () => {
-    await page.goto(inputImpedance);
+    await visitor.open(inputImpedance);
     await page.getByLabel('Resistance', { exact: true }).fill('3 mm');
     await page.getByLabel('Length', { exact: true }).fill('-0.3');
     await page.getByRole('button', { name: 'Calculate' }).click();
@@ -100,7 +90,7 @@ describe('an engineer on the Bench', () => {
   });
 
   it('reads exact values with the arrow keys, and the figures follow', async () => {
-    await page.goto(inputImpedance);
+    await visitor.open(inputImpedance);
     const { result } = await calculate(page);
     const cursor = page.getByRole('slider', { name: 'Cursor on Input impedance' });
     await cursor.focus();
@@ -112,12 +102,12 @@ describe('an engineer on the Bench', () => {
   });
 
   it('copies the call as a script, and a link that reopens the input', async () => {
-    await page.goto(inputImpedance);
+    await visitor.open(inputImpedance);
     await page.getByLabel('Length', { exact: true }).fill('7 m');
     await calculate(page);
     await page.getByRole('button', { name: 'Copy curl snippet' }).click();
     const script = await page.evaluate(() => navigator.clipboard.readText());
-    expect(script).toContain(`${origin}/api/v1/terminations/input-impedance`);
+    expect(script).toContain(`${new URL(serverUrl()).origin}/api/v1/terminations/input-impedance`);
     expect(script).toContain('"length_m":7');
 
     await page.getByRole('button', { name: 'Copy link' }).click();
@@ -128,11 +118,16 @@ describe('an engineer on the Bench', () => {
   });
 
   it('finds the call in the log', async () => {
-    await page.goto(inputImpedance);
+    await visitor.open(inputImpedance);
     const { id } = await calculate(page);
     await page.getByRole('link', { name: String(id) }).click();
     await page.waitForURL(`**/console/calls/${id}`);
     await page.getByRole('heading', { name: 'terminations/input-impedance' }).waitFor();
+  });
+
+  it('had nothing load from elsewhere and nothing refused by the security policy', () => {
+    expect(visitor.elsewhere).toEqual([]);
+    expect(visitor.faults).toEqual([]);
   });
 });
 
@@ -141,19 +136,19 @@ describe.each([
   ['dark', 1280],
   ['light', 390],
 ] as const)('in %s at %i px', (colorScheme, width) => {
-  let shown: Page;
+  let shown: Visitor;
 
   beforeAll(async () => {
-    shown = await signIn({ colorScheme, viewport: { width, height: 900 } });
+    shown = await newVisitor({ member: engineer, scheme: colorScheme, width });
   });
 
   it.each(calculations.map((calculation) => [calculationPath(calculation), calculation] as const))('%s is accessible and never wider than the window', async (_, calculation) => {
-    await shown.goto(pathOnBench(calculation));
-    await calculate(shown);
-    await shown.locator('figure svg').first().waitFor();
-    const { violations } = await new AxeBuilder({ page: shown }).analyze();
+    await shown.open(pathOnBench(calculation));
+    await calculate(shown.page);
+    await shown.page.locator('figure svg').first().waitFor();
+    const { violations } = await new AxeBuilder({ page: shown.page }).analyze();
     expect(violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ html }) => html.slice(0, 160)).join(' | ')}`)).toEqual([]);
-    expect(await shown.evaluate(() => document.documentElement.scrollWidth - document.documentElement.clientWidth)).toBe(0);
+    expect(await shown.page.evaluate(() => document.documentElement.scrollWidth - document.documentElement.clientWidth)).toBe(0);
   });
 });
 

@@ -48,7 +48,7 @@ export const secondaryConstants = defineCalculation({
       attenuation_np_per_m: finiteColumn(alpha),
       attenuation_db_per_m: finiteColumn(alpha.map((each) => each * decibelsPerNeper)),
       phase_constant_rad_per_m: finiteColumn(beta),
-      characteristic_impedance_ohm: columns.complex(characteristicImpedance, { pointer: '/characteristic_impedance_ohm', code: 'infinite_impedance', reason: 'nothing flows between the conductors, so the characteristic impedance is infinite' }),
+      characteristic_impedance_ohm: columns.complex(characteristicImpedance, { pointer: '/characteristic_impedance_ohm', code: 'infinite_impedance', reason: 'nothing flows between the conductors, so the characteristic impedance has no finite value' }),
       phase_velocity_m_per_s: columns.real(delay.map((each) => (each === Infinity ? 0 : 1 / each)), { pointer: '/phase_velocity_m_per_s', code: 'infinite_velocity', reason: 'the phase does not turn along the line, so its velocity is infinite' }),
       group_velocity_m_per_s: columns.real(groupDelaySPerM.map((each) => (each === Infinity ? 0 : 1 / each)), { pointer: '/group_velocity_m_per_s', code: 'infinite_velocity', reason: 'the phase does not change with frequency, so the group velocity is infinite' }),
       delay_s_per_m: columns.real(delay, { pointer: '/delay_s_per_m', code: 'infinite_delay', reason: 'the delay grows without bound towards 0 Hz' }),

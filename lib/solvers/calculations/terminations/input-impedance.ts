@@ -128,7 +128,7 @@ function compute(given: Line, lengthM: number, closedBy: Termination, frequencie
       frequency_hz: finiteColumn(frequencies),
       input_impedance_ohm: columns.complex(space.column(V.div(I)), { pointer: '/input_impedance_ohm', code: 'pole', reason: 'no current enters, so the impedance is infinite' }, noCurrent),
       input_admittance_s: columns.complex(space.column(I.div(V)), { pointer: '/input_admittance_s', code: 'pole', reason: 'no voltage stands at the input, so the admittance is infinite' }, noVoltage),
-      characteristic_impedance_ohm: columns.complex(Zc, { pointer: '/characteristic_impedance_ohm', code: 'infinite_impedance', reason: 'nothing flows between the conductors, so the characteristic impedance is infinite' }),
+      characteristic_impedance_ohm: columns.complex(Zc, { pointer: '/characteristic_impedance_ohm', code: 'infinite_impedance', reason: 'nothing flows between the conductors, so the characteristic impedance has no finite value' }),
       reflection_at_termination: columns.complex(space.column(atTermination), { pointer: '/reflection_at_termination', code: 'no_value', reason: 'there is no forward wave to compare with' }),
       reflection_at_input: columns.complex(space.column(atTermination.mul(two.roundTrip)), { pointer: '/reflection_at_input', code: 'no_value', reason: 'there is no forward wave to compare with' }),
       reflection_at_reference: columns.complex(space.column(atReference.gamma), { pointer: '/reflection_at_reference', code: 'no_value', reason: 'there is no forward wave to compare with' }),

@@ -1,7 +1,7 @@
 'use client';
 
 import { createColumnHelper, flexRender, getCoreRowModel, getSortedRowModel, useReactTable, type SortingState } from '@tanstack/react-table';
-import { useState } from 'react';
+import { useMemo, useState } from 'react';
 import { LocalTime } from '@/app/_components/local-time';
 import { Cell, HeaderCell, Row, Table, TableFrame } from '@/app/_components/table';
 import { QuotaPair } from '@/app/console/_components/quota-pair';
@@ -22,9 +22,9 @@ const fromDesktop = 'hidden lg:table-cell';
 export function KeyTable({ keys, onOpen }: KeyTableProps) {
   // The API's own order first: keys in force, then by name.
   const [sorting, setSorting] = useState<SortingState>([]);
-  const table = useReactTable({
-    data: keys as Key[],
-    columns: [
+  // The same columns from render to render: a cell is a component, and a new one would lose the focus that stands in it.
+  const columns = useMemo(
+    () => [
       column.accessor('name', {
         header: 'Name',
         cell: ({ row }) => (
@@ -72,6 +72,11 @@ export function KeyTable({ keys, onOpen }: KeyTableProps) {
         cell: ({ row: { original: key } }) => <span className={stateColours[key.state]}>{key.state}</span>,
       }),
     ],
+    [onOpen],
+  );
+  const table = useReactTable({
+    data: keys as Key[],
+    columns,
     state: { sorting },
     onSortingChange: setSorting,
     getCoreRowModel: getCoreRowModel(),

@@ -1,6 +1,6 @@
 'use client';
 
-import { useState } from 'react';
+import { useCallback, useState } from 'react';
 import useSWR from 'swr';
 import { Button } from '@/app/_components/button';
 import { EmptyState } from '@/app/_components/empty-state';
@@ -25,6 +25,7 @@ export function Keys({ canManage }: { readonly canManage: boolean }) {
   const [open, setOpen] = useState<Open | null>(null);
   const close = () => setOpen(null);
   const issue = () => setOpen({ what: 'issue' });
+  const look = useCallback((key: Key) => setOpen({ what: 'sheet', key }), []);
 
   function closeAndReload() {
     close();
@@ -39,7 +40,7 @@ export function Keys({ canManage }: { readonly canManage: boolean }) {
       </PageTitle>
       {error && <FailureNotice error={error} onRetry={() => void mutate()} className="mb-5" />}
       {!data && !error && <LoadingPair label="Reading the keys" />}
-      {data && data.data.length > 0 && <KeyTable keys={data.data} onOpen={(key) => setOpen({ what: 'sheet', key })} />}
+      {data && data.data.length > 0 && <KeyTable keys={data.data} onOpen={look} />}
       {data && data.data.length === 0 && <NoKeys onIssue={canManage ? issue : null} />}
 
       {open?.what === 'issue' && (

@@ -66,6 +66,9 @@ export function drawPanel({ panel, axis, axisTitle, x, y, frame, labelled }: Pan
       axisY({ ticks: verticalTicks, tickSize: 0, tickPadding: 8, label: y.unit || null, labelArrow: 'none', labelAnchor: 'top', labelOffset: margins.left - 4, tickFormat: formatOf(y) }),
     ],
   }) as SVGSVGElement & { scale(name: string): { apply(value: number): number } | undefined };
+  svg.setAttribute('role', 'img');
+  // The library labels each group of marks; inside an image a label is heard by nobody and not allowed.
+  for (const group of svg.querySelectorAll('g[aria-label]')) group.removeAttribute('aria-label');
   const [horizontal, vertical] = [svg.scale('x')!, svg.scale('y')!];
   const drawn = { svg, xOf: (value: number) => horizontal.apply(value / x.divisor), yOf: (value: number) => vertical.apply(value / y.divisor) };
   if (labelled) labelEnds(drawn, frame.width - right, traces.map(({ label, points, style }) => ({ label, colour: style.colour, y: vertical.apply(lastValue(points)) })));

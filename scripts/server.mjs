@@ -17,6 +17,7 @@ const longestDrain = 10_000;
 const frameworkMethods = new Set(['GET', 'HEAD', 'POST', 'PUT', 'PATCH', 'DELETE', 'OPTIONS']);
 
 const underWay = new Set();
+const upgraded = new Set();
 let stopping = false;
 let upgrade;
 let answer;
@@ -103,9 +104,12 @@ server.on('clientError', (error, socket) => {
 });
 
 server.on('upgrade', (request, socket, head) => {
-  // Only the development mode speaks WebSocket.
-  if (upgrade) upgrade(request, socket, head);
-  else socket.end('HTTP/1.1 400 Bad Request\r\nConnection: close\r\nContent-Length: 0\r\n\r\n');
+  // Only the development mode speaks WebSocket; nothing is under way in one that an end could cut short.
+  if (upgrade && !stopping) {
+    upgraded.add(socket);
+    socket.once('close', () => upgraded.delete(socket));
+    upgrade(request, socket, head);
+  } else socket.end('HTTP/1.1 400 Bad Request\r\nConnection: close\r\nContent-Length: 0\r\n\r\n');
 });
 
 // ---------------------------------------------------------------------------------------------------
@@ -117,6 +121,7 @@ async function stop() {
   setTimeout(() => process.exit(1), longestDrain).unref();
   for (const response of underWay) if (!response.headersSent) response.setHeader('Connection', 'close');
   const closed = new Promise((resolve) => server.close(resolve));
+  for (const socket of upgraded) socket.destroy();
   const idle = setInterval(() => server.closeIdleConnections(), 50);
   await closed;
   clearInterval(idle);

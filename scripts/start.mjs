@@ -50,8 +50,9 @@ async function end(code) {
 
 whenToldToStop(async () => {
   told = true;
+  const left = interruptStep();
   await endRunning();
-  await interruptStep();
+  await left;
   await end(0);
 });
 

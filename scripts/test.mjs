@@ -24,8 +24,9 @@ const undone = [];
 
 whenToldToStop(async () => {
   told = true;
+  const left = interruptStep();
   await endRunning();
-  await interruptStep();
+  await left;
   await clearUp();
   process.exit(130);
 });

@@ -42,11 +42,14 @@ function CalculationBench({ calculation }: { readonly calculation: Calculation }
     });
   }, [load]);
 
+  useEffect(() => {
+    // Below the form the answer would arrive out of sight.
+    if (call.answered && window.matchMedia('(width < 64rem)').matches) answer.current?.scrollIntoView({ block: 'start' });
+  }, [call.answered]);
+
   async function send({ input }: { input: unknown }) {
     window.history.replaceState(null, '', `#${await encodeInput(input)}`);
     await call.send(input);
-    // Below the form the answer would arrive out of sight.
-    if (window.matchMedia('(width < 64rem)').matches) answer.current?.scrollIntoView({ block: 'start' });
   }
 
   function run(event?: SyntheticEvent) {

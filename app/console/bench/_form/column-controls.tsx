@@ -21,7 +21,7 @@ export function NumbersControl(props: ControlProps<NumbersField | ComplexesField
   const text = String(bound.value ?? '');
   const form = field.kind === 'complexes' ? 'Complex numbers such as 75-30j' : 'Numbers';
   const note = `${form}, one a line or between commas${unit ? `; ${unit} where no unit is typed` : ''}.`;
-  return <TextAreaField {...bound} value={text} label={label} help={help ?? note} error={error} className={className} rows={heightOf(text)} mono spellCheck={false} autoComplete="off" aria-description={description} />;
+  return <TextAreaField {...bound} value={text} label={label} help={help ? `${help} ${note}` : note} error={error} className={className} rows={heightOf(text)} mono spellCheck={false} autoComplete="off" aria-description={description} />;
 }
 
 /** Lines of columns, as they are pasted from a spreadsheet. */
@@ -37,7 +37,7 @@ export function RowsControl(props: ControlProps<RowsField>) {
       {...bound}
       value={text}
       label={label}
-      help={help ?? `A line each: ${columns}. Lines pasted from a spreadsheet will do.`}
+      help={`${help ? `${help} ` : ''}A line each: ${columns}. Lines pasted from a spreadsheet will do.`}
       error={error}
       className={className}
       rows={heightOf(text) + 1}

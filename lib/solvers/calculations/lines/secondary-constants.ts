@@ -87,7 +87,7 @@ export const secondaryConstants = defineCalculation({
         { pointer: '/characteristic_impedance_ohm/im/0', value: -0.0091514069592545343 },
       ],
       tolerance: 1e-12,
-      source: 'eigenvalues of the matrix exponential of the telegrapher equations, to 30 digits (tests/reference/generate.py)',
+      source: 'eigenvalues of the matrix exponential of the telegrapher equations, computed to 30 digits',
     },
   ],
 });

@@ -79,7 +79,7 @@ export const inputImpedance = defineCalculation({
         { pointer: '/return_loss_db/400', value: 10.4510393766866997 },
       ],
       tolerance: 1e-12,
-      source: 'matrix exponential of the telegrapher equations, to 30 digits (tests/reference/generate.py)',
+      source: 'matrix exponential of the telegrapher equations, computed to 30 digits',
     },
     {
       name: 'A quarter wave turns 25 ohm into 100 ohm',

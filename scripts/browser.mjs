@@ -2,12 +2,14 @@
 import fs from 'node:fs';
 import path from 'node:path';
 import { installPackage } from './debian.mjs';
+import { StepFailure } from './steps.mjs';
 
 const programs = ['chromium', 'chromium-browser', 'google-chrome'];
 
 export async function provideBrowser() {
   if (!findBrowser()) await installPackage('chromium');
   const found = findBrowser();
+  if (!found) throw new StepFailure(`None of ${programs.join(', ')} is in PATH; say where one is with CHROMIUM_PATH.`);
   return { path: found, said: found };
 }
 

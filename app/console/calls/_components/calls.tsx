@@ -1,7 +1,7 @@
 'use client';
 
 import { useSearchParams } from 'next/navigation';
-import { useMemo, useRef } from 'react';
+import { useMemo, useState } from 'react';
 import useSWR from 'swr';
 import { asProblem } from '@/app/_api/client';
 import { Button, ButtonLink } from '@/app/_components/button';
@@ -36,7 +36,8 @@ export function Calls({ readsAll, readsKeys }: CallsProps) {
   }, [query]);
   // Newest page: new calls appear by themselves. An older page does not move under the reader.
   const { data, error, mutate, isLoading } = useSWR<CallPage>(path, { refreshInterval: cursor ? 0 : 15_000, keepPreviousData: true });
-  const newerThan = useRef(new Map<string, string | null>());
+  /** Which page each older one was reached from. */
+  const [newerThan, setNewerThan] = useState<ReadonlyMap<string, string | null>>(new Map());
 
   function show(filters: CallFilters, cursor: string | null = null) {
     const next = queryOf(filters, cursor);
@@ -44,12 +45,12 @@ export function Calls({ readsAll, readsKeys }: CallsProps) {
   }
 
   function showOlder(next: string) {
-    newerThan.current.set(next, cursor);
+    setNewerThan((pages) => new Map(pages).set(next, cursor));
     show(filters, next);
     window.scrollTo({ top: 0 });
   }
 
-  const known = cursor !== null && newerThan.current.has(cursor);
+  const known = cursor !== null && newerThan.has(cursor);
   const filtered = queryOf(filters) !== '';
   return (
     <>
@@ -79,7 +80,7 @@ export function Calls({ readsAll, readsKeys }: CallsProps) {
       {data && (cursor !== null || data.next_cursor !== null) && (
         <nav aria-label="Pages" className="mt-4 flex gap-3">
           {cursor !== null && (
-            <Button variant="ghost" onClick={() => show(filters, known ? newerThan.current.get(cursor) : null)}>
+            <Button variant="ghost" onClick={() => show(filters, known ? newerThan.get(cursor) : null)}>
               {known ? 'Newer' : 'Newest'}
             </Button>
           )}

@@ -42,6 +42,8 @@ const server = http.createServer(
     if (stopping) response.setHeader('Connection', 'close');
     const handle = await ready;
     setRight(request);
+    // An unknown method that is still here is one for a page, and some make the framework stumble.
+    if (!frameworkMethods.has(request.method)) return response.writeHead(405, { Allow: 'GET, HEAD' }).end();
     await handle(request, response);
   },
 );

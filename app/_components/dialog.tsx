@@ -23,6 +23,8 @@ export function Dialog({ title, onClose, dismissible = true, wide = false, child
     const element = dialog.current;
     const opener = document.activeElement;
     element?.showModal();
+    // The framework's autoFocus comes before the dialog is open, when nothing in it can have the focus.
+    element?.querySelector<HTMLElement>('[data-first-focus]')?.focus();
     return () => {
       element?.close();
       if (opener instanceof HTMLElement) opener.focus();

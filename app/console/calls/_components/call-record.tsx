@@ -109,12 +109,14 @@ function Document({ title, content, absent }: { readonly title: string; readonly
 
 function Entry({ label, copy, children }: { readonly label: string; readonly copy?: string | null; readonly children: ReactNode }) {
   return (
-    <div className="grid min-h-8 grid-cols-[8.5rem_1fr_auto] items-center gap-x-3 py-0.5">
+    <div className="grid min-h-8 grid-cols-[8.5rem_1fr] items-center gap-x-3 py-0.5">
       <dt className="text-ash">{label}</dt>
-      <dd className="min-w-0 truncate" title={copy ?? undefined}>
-        {children}
+      <dd className="flex min-w-0 items-center gap-x-3">
+        <span className="min-w-0 flex-1 truncate" title={copy ?? undefined}>
+          {children}
+        </span>
+        {copy && <CopyButton text={copy} of={label.toLowerCase()} />}
       </dd>
-      {copy && <CopyButton text={copy} of={label.toLowerCase()} />}
     </div>
   );
 }

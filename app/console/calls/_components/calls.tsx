@@ -29,17 +29,18 @@ interface CallPage {
 export function Calls({ readsAll, readsKeys }: CallsProps) {
   const parameters = useSearchParams();
   const query = parameters.toString();
-  const { filters, cursor, path } = useMemo(() => {
-    const filters = filtersOf(new URLSearchParams(query));
-    const cursor = new URLSearchParams(query).get('cursor');
-    return { filters, cursor, path: callsPath(filters, cursor, Date.now()) };
-  }, [query]);
+  const filters = useMemo(() => filtersOf(new URLSearchParams(query)), [query]);
+  const cursor = parameters.get('cursor');
+  // "Last hour" counts from when the page was opened or the filter chosen, so that its pages fit together.
+  const [openedAt, setOpenedAt] = useState(presentMoment);
+  const path = callsPath(filters, cursor, openedAt);
   // Newest page: new calls appear by themselves. An older page does not move under the reader.
   const { data, error, mutate, isLoading } = useSWR<CallPage>(path, { refreshInterval: cursor ? 0 : 15_000, keepPreviousData: true });
   /** Which page each older one was reached from. */
   const [newerThan, setNewerThan] = useState<ReadonlyMap<string, string | null>>(new Map());
 
   function show(filters: CallFilters, cursor: string | null = null) {
+    if (cursor === null) setOpenedAt(presentMoment());
     const next = queryOf(filters, cursor);
     window.history.pushState(null, '', next ? `?${next}` : window.location.pathname);
   }
@@ -93,6 +94,10 @@ export function Calls({ readsAll, readsKeys }: CallsProps) {
       )}
     </>
   );
+}
+
+function presentMoment(): number {
+  return Date.now();
 }
 
 function NoCalls({ filtered, onClear }: { readonly filtered: boolean; readonly onClear: () => void }) {

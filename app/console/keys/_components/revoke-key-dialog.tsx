@@ -50,7 +50,7 @@ export function RevokeKeyDialog({ revoking: key, onRevoked, onClose }: RevokeKey
         <Button variant="destructive" busy={busy} onClick={revoke}>
           {busy ? 'Revoking' : 'Revoke key'}
         </Button>
-        <Button variant="ghost" autoFocus onClick={onClose}>
+        <Button variant="ghost" data-first-focus onClick={onClose}>
           Keep it
         </Button>
       </div>

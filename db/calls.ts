@@ -105,7 +105,7 @@ function totals(refunds: readonly Refund[]): Refund[] {
     const name = `${refund.holder} ${refund.period}`;
     sums.set(name, { ...refund, units: refund.units + (sums.get(name)?.units ?? 0) });
   }
-  return [...sums.values()].sort((a, b) => (a.holder < b.holder ? -1 : 1));
+  return [...sums.values()].sort((a, b) => (`${a.holder} ${a.period}` < `${b.holder} ${b.period}` ? -1 : 1));
 }
 
 /** Postgres refuses a row whose month has no partition with check_violation. */

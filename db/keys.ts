@@ -66,6 +66,8 @@ export async function updateKey(
 ): Promise<boolean> {
   const changed = await database('api_key')
     .where({ organization_id: organizationId, id, version })
+    // Its name stands in the log of the calls it made.
+    .whereNull('revoked_at')
     .update({ ...change, version: version + 1 });
   return changed === 1;
 }

@@ -1,6 +1,6 @@
 /**
  * What an operation of the API is: one declaration that the route validates by, the OpenAPI document
- * shows and the tests walk. Calculations get theirs from the registry (calculation-operations.ts).
+ * shows and the tests walk. Calculations get theirs from the registry (operations/calculations.ts).
  */
 import type { z } from 'zod';
 import type { Permission, Scope } from '@/lib/auth/permissions';

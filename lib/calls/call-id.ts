@@ -9,9 +9,11 @@ export function newRequestId(): string {
   return `req_${ulid()}`;
 }
 
+/** Null for an id of no time, or of one beyond the years that are written with four digits. */
 export function timeOfCallId(id: string): string | null {
   try {
-    return new Date(decodeTime(id.slice('call_'.length))).toISOString();
+    const time = new Date(decodeTime(id.slice('call_'.length)));
+    return time.getUTCFullYear() <= 9999 ? time.toISOString() : null;
   } catch {
     return null;
   }

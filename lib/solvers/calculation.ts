@@ -61,8 +61,9 @@ export type Group = (typeof groups)[number];
 export interface Calculation<Input extends z.ZodType = z.ZodType, Output extends z.ZodType = z.ZodType> {
   readonly id: string;
   readonly group: Group;
+  /** At most 60 characters. */
   readonly title: string;
-  /** One sentence, at most 60 characters in `title`, any length here. */
+  /** A sentence. */
   readonly summary: string;
   readonly input: Input;
   readonly output: Output;

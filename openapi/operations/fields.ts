@@ -4,9 +4,9 @@ import { z } from '../zod';
 export const dateTime = (description: string, example = '2026-12-01T09:30:00.000Z') =>
   z.iso.datetime().max(35).meta({ description, examples: [example] });
 
-/** A moment to search by: any offset, and a year that the database can hold. */
+/** A moment to search by: any offset, and a year of four digits also in UTC, as the database needs it. */
 export const moment = (description: string, example: string) =>
-  z.iso.datetime({ offset: true }).regex(/^(?!0)/).max(35).meta({ description, examples: [example] });
+  z.iso.datetime({ offset: true }).regex(/^(?!0|9999)/).max(35).meta({ description, examples: [example] });
 
 /** A line of text that comes back as it was sent: no control characters, no half of a surrogate pair. */
 const noControlCharacters = /^[^\p{Cc}\p{Cs}]*$/u;

@@ -134,8 +134,9 @@ describe('filtering calls', () => {
   });
 
   test('never fails on a time or a text that the database could not hold', async () => {
-    const moments = ['0000-01-01T00:00:00Z', '0001-01-01T00:00:00Z', '9999-12-31T23:59:59.999999999Z', '2026-01-01T00:00:00+23:59', '2026-01-01T00:00:00-23:59'];
+    const moments = ['0000-01-01T00:00:00Z', '0001-01-01T00:00:00Z', '9999-12-31T23:59:59.999999999Z', '9999-12-31T23:59:59-10:00', '2026-01-01T00:00:00+23:59', '2026-01-01T00:00:00-23:59'];
     const queries = [...moments.flatMap((moment) => [`?from=${encodeURIComponent(moment)}`, `?to=${encodeURIComponent(moment)}`]), '?calculation=%00', '?calculation=%ED%A0%80'];
     for (const query of queries) expect([200, 422], query).toContain((await page(query)).status);
+    expect((await call('GET', '/api/v1/calls/call_7ZZZZZZZZZ0000000000000000', { key: world.key.secret })).status).toBe(404);
   });
 });

@@ -255,3 +255,74 @@ describe('every accepted input', () => {
     );
   });
 });
+
+describe('what an answer says in two ways', () => {
+  const unequal = [{ re: 50, im: 10 }, { re: 75, im: -20 }];
+  const root = (z: { re: number }, w: { re: number }) => 2 * Math.sqrt(z.re * w.re);
+  const times = (p: { re: number; im: number }, q: { re: number; im: number }) => ({ re: p.re * q.re - p.im * q.im, im: p.re * q.im + p.im * q.re });
+  const minus = (p: { re: number; im: number }) => ({ re: -p.re, im: -p.im });
+  const sum = (...all: { re: number; im: number }[]) => all.reduce((p, q) => ({ re: p.re + q.re, im: p.im + q.im }));
+
+  it('is one cascade: T from S, S from ABCD, return loss from S11, input impedance from S11', () => {
+    run(
+      fc.property(fc.array(fc.record({ kind: fc.constant('line'), line: rlgc, length_m: decades(-2, 0) }), { minLength: 1, maxLength: 3 }), decades(6, 8), (chain, f) => {
+        const answer = solve('networks', 'cascade', { elements: chain, frequency_hz: f, reference_impedance_ohm: unequal, include: ['abcd', 's', 't'] }) as CascadeResult & { t: Matrix; return_loss_db: Column; insertion_loss_db: Column; input_impedance_ohm: ComplexColumn };
+        if (answer.abcd.a.re[0] === null || answer.t.t22.re[0] === null) return;
+        const [s11, s21, s22] = [value(answer.s.s11), value(answer.s.s21), value(answer.s.s22)];
+        const near = (p: { re: number; im: number }, q: { re: number; im: number }, scale: number) => expect(apart(p, q)).toBeLessThanOrEqual(1e-11 * scale);
+        const t22 = value(answer.t.t22);
+        near(times(t22, s21), { re: 1, im: 0 }, 1);
+        near(value(answer.t.t12), times(s11, t22), size(t22));
+        near(value(answer.t.t21), minus(times(s22, t22)), size(t22));
+        near(value(answer.t.t11), times(sum(times(s21, s21), minus(times(s11, s22))), t22), size(t22));
+        const [z1, z2] = unequal as [{ re: number; im: number }, { re: number; im: number }];
+        const [a, b, c, d] = [answer.abcd.a, answer.abcd.b, answer.abcd.c, answer.abcd.d].map((column) => value(column)) as [ReturnType<typeof value>, ReturnType<typeof value>, ReturnType<typeof value>, ReturnType<typeof value>];
+        const n = sum(times(a, z2), b, times(times(c, z1), z2), times(d, z1));
+        near(times(s21, n), { re: root(z1, z2), im: 0 }, size(n));
+        expect(answer.return_loss_db[0]! + 20 * Math.log10(size(s11))).toBeCloseTo(0, 8);
+        expect(answer.insertion_loss_db[0]! + 20 * Math.log10(size(s21))).toBeCloseTo(0, 8);
+        const zin = value(answer.input_impedance_ohm);
+        near(times(s11, sum(zin, z1)), sum(zin, { re: -z1.re, im: z1.im }), size(zin) + size(z1));
+      }),
+    );
+  });
+
+  it('is one line: wavelength and delay from the phase constant', () => {
+    run(
+      fc.property(rlgc, frequency, (given, f) => {
+        const { phase_constant_rad_per_m, wavelength_m, delay_s_per_m } = solve('lines', 'secondary-constants', { line: given, frequency_hz: f }) as SecondaryResult & { wavelength_m: number[]; delay_s_per_m: number[] };
+        expect((wavelength_m[0] * phase_constant_rad_per_m[0]) / (2 * Math.PI)).toBeCloseTo(1, 12);
+        expect((delay_s_per_m[0] * 2 * Math.PI * f) / phase_constant_rad_per_m[0]).toBeCloseTo(1, 12);
+      }),
+    );
+  });
+
+  it('is one sweep: steps of equal size, or of equal ratio', () => {
+    const given = { kind: 'lossless', characteristic_impedance_ohm: 50, velocity_factor: 0.7 };
+    const frequencies = (sweep: object) => (solve('lines', 'secondary-constants', { line: given, frequency_hz: sweep }) as { frequency_hz: number[] }).frequency_hz;
+    const log = frequencies({ start: 1e3, stop: 1e9, points: 7, spacing: 'log' });
+    [1e3, 1e4, 1e5, 1e6, 1e7, 1e8, 1e9].forEach((expected, index) => expect(log[index] / expected).toBeCloseTo(1, 12));
+    expect(frequencies({ start: 0, stop: 12, points: 4 })).toEqual([0, 4, 8, 12]);
+  });
+
+  it('is one termination: in parts or polar, in a table or as a number, matched or as the reference', () => {
+    const given = { kind: 'rlgc', resistance_ohm_per_m: 1, inductance_h_per_m: 2.5e-7, conductance_s_per_m: 1e-5, capacitance_f_per_m: 1e-10 };
+    const at = (termination: unknown) => value(terminated({ line: given, length_m: 1.3, termination, frequency_hz: 3e8 }).input_impedance_ohm);
+    const plain = at({ re: 30, im: 40 });
+    expect(apart(at({ magnitude: 50, angle_deg: (Math.atan2(4, 3) * 180) / Math.PI }), plain)).toBeLessThanOrEqual(1e-12 * size(plain));
+    const table = { kind: 'table', frequency_hz: [1e8, 5e8], impedance_ohm: { re: [10, 50], im: [80, 0] } };
+    expect(apart(at(table), plain)).toBeLessThanOrEqual(1e-12 * size(plain));
+    const closed = (termination: unknown) => value((cascaded({ elements: [{ kind: 'line', line: given, length_m: 1.3 }], frequency_hz: 3e8, reference_impedance_ohm: unequal, termination }) as CascadeResult & { input_impedance_ohm: ComplexColumn }).input_impedance_ohm);
+    expect(apart(closed('matched'), closed(unequal[1]))).toBeLessThanOrEqual(1e-12 * size(closed('matched')));
+    expect(apart(closed({ re: 30, im: 40 }), plain)).toBeLessThanOrEqual(1e-12 * size(plain));
+  });
+
+  it('knows an active chain, also at its pole and in a sweep', () => {
+    const passive = (ohm: unknown, f: unknown) => cascaded({ elements: [{ kind: 'series', impedance_ohm: ohm }], frequency_hz: f }).passive;
+    for (const f of [1e6, [1e6, 1e6]]) {
+      expect(passive(-100, f)).toBe(false);
+      expect(passive(-20, f)).toBe(false);
+      expect(passive(20, f)).toBe(true);
+    }
+  });
+});

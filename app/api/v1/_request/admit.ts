@@ -91,7 +91,7 @@ function limited(slug: 'burst-limit' | 'quota-exceeded', detail: string, policy:
 }
 
 /** In memory and by address: what strangers read is the same for all of them and cheap. */
-const anonymousRequestsPerMinute = Number(process.env.ANONYMOUS_REQUESTS_PER_MINUTE ?? 1200);
+const anonymousRequestsPerMinute = Number(process.env.ANONYMOUS_REQUESTS_PER_MINUTE) || 1200;
 const anonymous = new RateLimiterMemory({ points: anonymousRequestsPerMinute, duration: 60 });
 
 async function admitAnonymous(operation: Operation, exchange: Exchange): Promise<Admission> {

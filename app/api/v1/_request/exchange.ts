@@ -25,10 +25,11 @@ export function beginExchange(request: Request): Exchange {
 
 /**
  * The server writes this header itself from the socket, or, told to trust the proxy before it, keeps the
- * proxy's, whose own entry is the last. IPv4 inside IPv6 is written as IPv4, as allow lists have it.
+ * proxy's, whose own entry is the last. IPv4 inside IPv6 is written as IPv4, as allow lists have it, and the name of
+ * this machine's own interface, which follows a link-local address, is no part of the address.
  */
 function addressOf(request: Request): string | null {
   const last = request.headers.get('x-forwarded-for')?.split(',').pop()?.trim() ?? '';
-  const address = last.replace(/^::ffff:(?=\d+\.\d+\.\d+\.\d+$)/i, '');
+  const address = last.replace(/^::ffff:(?=\d+\.\d+\.\d+\.\d+$)/i, '').replace(/%.*$/, '');
   return isIP(address) ? address : null;
 }

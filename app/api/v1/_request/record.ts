@@ -32,6 +32,8 @@ export async function record(
   const { caller } = admission;
   if (!caller) return;
   const answer = outcome.body;
+  // A call that was not let in leaves its row, but not a megabyte of whatever it sent.
+  const keepsBodies = caller.keepsBodies && admission.refusal === null;
   await recordCall({
     id: callIdOf(exchange),
     created_at: new Date(exchange.startedAt).toISOString(),
@@ -49,8 +51,8 @@ export async function record(
     engine: engineVersion,
     input_digest: outcome.digests?.input ?? null,
     result_digest: outcome.digests?.result ?? null,
-    request: caller.keepsBodies ? parsed.bodyText : null,
-    answer: caller.keepsBodies && answer !== null && answer.length <= largestKeptAnswer ? answer : null,
+    request: keepsBodies ? parsed.bodyText : null,
+    answer: keepsBodies && answer !== null && answer.length <= largestKeptAnswer ? answer : null,
     refunds: refundsOf(admission, units),
   });
 }

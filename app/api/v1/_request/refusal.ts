@@ -42,7 +42,7 @@ export function refusalOf(error: unknown, requestId: string): Refusal {
   if (error instanceof Refusal) return error;
   console.error(JSON.stringify({ request_id: requestId, error: error instanceof Error ? error.stack : String(error) }));
   return isDatabaseAway(error)
-    ? new Refusal('unavailable', 'the database is out of reach; nothing was charged for an answer that was not given', { headers: { 'Retry-After': '2' } })
+    ? new Refusal('unavailable', 'the database is out of reach; try again in a moment', { headers: { 'Retry-After': '2' } })
     : new Refusal('internal-error', 'the service failed; the request id finds the cause in its log');
 }
 

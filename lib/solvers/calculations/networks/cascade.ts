@@ -179,7 +179,7 @@ function compute({ elements, reference_impedance_ohm, termination: closedBy, inc
         ),
       }),
       ...(wanted.has('s') && {
-        s: named(['s11', 's12', 's21', 's22'], [s11, s21, s21, s22], (name, column) => columns.complex(column, { pointer: `/s/${name}`, code: 'does_not_exist', reason: 'the chain and its references resonate without loss' })),
+        s: named(['s11', 's12', 's21', 's22'], [s11, s21, s21, s22], (name, column) => columns.complex(column, { pointer: `/s/${name}`, code: 'does_not_exist', reason: 'the chain drives its own references, so there is no finite answer' })),
       }),
       ...(wanted.has('z') && {
         z: named(['z11', 'z12', 'z21', 'z22'], [space.column(two.a.div(two.c)), withScale(two, space.column(two.factor.div(two.c))), withScale(two, space.column(two.factor.div(two.c))), space.column(two.d.div(two.c))], (name, column) =>
@@ -217,7 +217,8 @@ function isPassive(s11: Parts, s21: Parts, s22: Parts): boolean {
   const at = ({ re, im }: Parts, index: number) => [re[index], im[index]] as const;
   return s11.re.every((_, index) => {
     const gain = largestGain(at(s11, index), at(s21, index), at(s22, index));
-    return !(gain > 1 + passiveRounding);
+    // Where S has no value the chain and its references oscillate, which no passive chain can.
+    return gain <= 1 + passiveRounding;
   });
 }
 

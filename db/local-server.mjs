@@ -84,7 +84,7 @@ export async function discardLocalServer(folder) {
   if (!fs.existsSync(folder)) return;
   const place = fs.realpathSync(folder);
   const [server] = installedServers();
-  if (server && fs.existsSync(path.join(place, 'postmaster.pid'))) {
+  if (server && isRunning({ place })) {
     await call({ server, owner: clusterOwner() }, 'pg_ctl', ['stop', '-D', place, '-m', 'immediate', '-w', '-t', '20']);
   }
   for (const each of [place, folder]) fs.rmSync(each, { recursive: true, force: true });
@@ -214,6 +214,11 @@ async function start(cluster, preferredPort) {
   throw new LocalServerError('PostgreSQL did not start.', output);
 }
 
+function isRunning(cluster) {
+  const lock = readLock(cluster);
+  return lock !== null && isServerOf(lock.pid, cluster);
+}
+
 /** The port of the server that runs in this place, or null. One that runs but does not answer is stopped. */
 async function findRunning(cluster) {
   const lock = readLock(cluster);
@@ -229,10 +234,11 @@ async function findRunning(cluster) {
 }
 
 async function stop(cluster) {
-  if (!fs.existsSync(path.join(cluster.place, 'postmaster.pid'))) return;
+  // Asked to stop a server that is gone, pg_ctl would signal whatever has its number now.
+  if (!isRunning(cluster)) return;
   for (const mode of ['fast', 'immediate']) {
     const { code } = await call(cluster, 'pg_ctl', ['stop', '-D', cluster.place, '-m', mode, '-w', '-t', '20', '-s']);
-    if (code === 0 || !fs.existsSync(path.join(cluster.place, 'postmaster.pid'))) return;
+    if (code === 0 || !isRunning(cluster)) return;
   }
   throw new LocalServerError(`PostgreSQL in ${cluster.place} did not stop.`);
 }

@@ -143,7 +143,12 @@ export async function up(knex: Knex): Promise<void> {
 
       if p_units > 0 then
         charged := charge(own_holder, p_units, a.holder_quota);
-        if charged is null then a.verdict := 'quota'; return a; end if;
+        if charged is null then
+          -- Others may have charged since it was first read.
+          a.holder_used := used(own_holder);
+          a.verdict := 'quota';
+          return a;
+        end if;
         a.holder_used := charged;
         charged := charge('organization:' || o.id, p_units, a.organization_quota);
         if charged is null then

@@ -78,6 +78,14 @@ export function formatCount(value: number): string {
   return grouped.format(value);
 }
 
+/** Exact as long as that is short; from ten million on four digits and a prefix, and the exact count on hover. */
+export function formatCountBriefly(value: number): string {
+  if (value < 1e7) return formatCount(value);
+  const [factor, prefix] = prefixes.find(([least]) => value >= least) ?? prefixes[6];
+  const brief = value / factor;
+  return `${Number.isInteger(brief) ? brief : significant(brief)} ${prefix}`;
+}
+
 /** Milliseconds with one decimal below a second: 4.1, 88.3, 1,240. */
 export function formatMilliseconds(value: number): string {
   return value < 1000 ? value.toFixed(1) : grouped.format(Math.round(value));

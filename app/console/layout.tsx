@@ -22,7 +22,7 @@ export default async function ConsoleLayout({ children }: { readonly children: R
   return (
     <div className="mx-auto flex min-h-dvh max-w-page flex-col px-5 sm:px-7">
       <SkipLink />
-      <header className="flex flex-wrap items-baseline gap-x-7 gap-y-1.5 pt-5">
+      <header className="flex flex-wrap items-baseline gap-x-7 gap-y-1.5 pt-5 lg:flex-nowrap">
         <Mark href="/console" />
         <ConsoleNavigation pages={pages.map(({ path, title }) => ({ path, title }))} />
         <div className="ml-auto flex min-w-0 items-baseline gap-x-5 text-small text-ash">

@@ -7,11 +7,11 @@ interface ConsoleNavigationProps {
   readonly pages: readonly { readonly path: string; readonly title: string }[];
 }
 
-/** Below the name on a phone, beside it elsewhere. Over the present page's word the rule beneath turns to copper. */
+/** Beside the name where there is room for both, else on the line below. Over the present page's word the rule beneath turns to copper. */
 export function ConsoleNavigation({ pages }: ConsoleNavigationProps) {
   const pathname = usePathname();
   return (
-    <nav aria-label="Console" className="order-last flex w-full gap-[22px] sm:order-none sm:w-auto">
+    <nav aria-label="Console" className="order-last flex w-full gap-[22px] lg:order-none lg:w-auto">
       {pages.map(({ path, title }) => {
         const here = pathname === path || pathname.startsWith(`${path}/`);
         return (

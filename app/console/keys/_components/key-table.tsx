@@ -5,7 +5,7 @@ import { useMemo, useState } from 'react';
 import { LocalTime } from '@/app/_components/local-time';
 import { Cell, HeaderCell, Row, Table, TableFrame } from '@/app/_components/table';
 import { QuotaPair } from '@/app/console/_components/quota-pair';
-import { formatCount } from '@/app/_format/numbers';
+import { formatCount, formatCountBriefly } from '@/app/_format/numbers';
 import { scopesInWords, stateColours, type Key } from './key';
 
 interface KeyTableProps {
@@ -18,6 +18,7 @@ const column = createColumnHelper<Key>();
 /** How much of the table a screen has room for; the rest is in the key's sheet. */
 const fromTablet = 'hidden md:table-cell';
 const fromDesktop = 'hidden lg:table-cell';
+const fromWideDesktop = 'hidden xl:table-cell';
 
 export function KeyTable({ keys, onOpen }: KeyTableProps) {
   // The API's own order first: keys in force, then by name.
@@ -34,7 +35,7 @@ export function KeyTable({ keys, onOpen }: KeyTableProps) {
         ),
         meta: { className: 'w-full max-w-0 min-w-32 lg:min-w-48' },
       }),
-      column.accessor('display', { header: 'Key', enableSorting: false, meta: { className: `whitespace-nowrap text-ash ${fromDesktop}`, mono: true } }),
+      column.accessor('display', { header: 'Key', enableSorting: false, meta: { className: `whitespace-nowrap text-ash ${fromWideDesktop}`, mono: true } }),
       column.accessor(({ scopes }) => scopesInWords(scopes), {
         id: 'scopes',
         header: 'Scopes',
@@ -49,9 +50,9 @@ export function KeyTable({ keys, onOpen }: KeyTableProps) {
       column.accessor('units_used', {
         header: 'Units used',
         cell: ({ row: { original: key } }) => (
-          <span className="block">
-            <span>{formatCount(key.units_used)}</span>
-            <span className="hidden text-ash sm:inline"> / {formatCount(key.monthly_unit_quota)}</span>
+          <span className="block" title={`${formatCount(key.units_used)} of ${formatCount(key.monthly_unit_quota)} units`}>
+            <span>{formatCountBriefly(key.units_used)}</span>
+            <span className="hidden text-ash sm:inline"> / {formatCountBriefly(key.monthly_unit_quota)}</span>
             <QuotaPair used={key.units_used} quota={key.monthly_unit_quota} className="mt-px mb-1 min-w-20" />
           </span>
         ),

@@ -45,7 +45,7 @@ export function fetcher<Data>(path: string): Promise<Data> {
 function problemOf(response: Response, data: unknown): Problem {
   if (typeof data === 'object' && data !== null && 'code' in data && 'title' in data) return data as Problem;
   // A proxy in front may answer in a form of its own.
-  return { ...unreachable, status: response.status, title: `The service answered ${response.status}`, detail: 'The answer is not one of the service’s own. Try again in a moment.' };
+  return { ...unreachable, status: response.status, title: `The service answered ${response.status}`, detail: 'the answer is not one of the service’s own; try again in a moment' };
 }
 
 function retryAfter(response: Response): number | null {

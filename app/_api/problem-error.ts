@@ -33,7 +33,7 @@ export const unreachable: Problem = {
   type: 'about:blank',
   title: 'The service cannot be reached',
   status: 0,
-  detail: 'No answer came back. Check the network and try again.',
+  detail: 'no answer came back; check the network and try again',
   code: 'unreachable',
 };
 

@@ -17,8 +17,8 @@ export function FailureNotice({ error, onRetry, className }: FailureNoticeProps)
   const problem = asProblem(error);
   const passing = problem.status === 0 || problem.status === 429 || problem.status === 503;
   return (
-    <Notice tone={passing ? 'warning' : 'error'} title={`${problem.title}.`} className={className}>
-      {problem.detail}{' '}
+    <Notice tone={passing ? 'warning' : 'error'} title={problem.detail ? `${problem.title}:` : `${problem.title}.`} className={className}>
+      {problem.detail && `${problem.detail}. `}
       {isProblemSlug(problem.code) && (
         <Link href={`/problems/${problem.code}`} className="link">
           What to do

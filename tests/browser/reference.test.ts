@@ -18,10 +18,15 @@ test('the reference shows the document and asks nobody else for anything, also w
   await open('/reference');
   await page.getByRole('heading', { name: 'Linewright', exact: false }).first().waitFor();
 
+  await page.getByRole('button', { name: /Auth Type/ }).first().click();
+  await page.getByRole('option', { name: /ApiKey/ }).first().click();
+  await page.keyboard.press('Escape');
+  await page.getByPlaceholder('Token').first().fill(world.key.secret);
+
   await page.getByRole('button', { name: /Test Request/ }).first().click();
   const sent = page.waitForRequest((request) => request.url().startsWith(`${origin}/api/v1/`) && !request.url().endsWith('/openapi.json'));
   await page.getByRole('button', { name: /^Send/ }).first().click();
-  await sent;
+  expect((await sent).headers().authorization, 'the call carries the key').toBe(`Bearer ${world.key.secret}`);
 
   expect(visitor.elsewhere).toEqual([]);
   expect(await page.evaluate(() => JSON.stringify({ ...localStorage, ...sessionStorage })), 'no key is kept').not.toContain(world.key.secret);

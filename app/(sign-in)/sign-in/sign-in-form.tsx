@@ -5,6 +5,7 @@ import { useState } from 'react';
 import { signInBody } from '@/openapi/operations/session';
 import { ProblemError, request } from '@/app/_api/client';
 import { Button } from '@/app/_components/button';
+import { FailureNotice } from '@/app/_components/failure-notice';
 import { Notice } from '@/app/_components/notice';
 import { TextField } from '@/app/_components/text-field';
 import { resolveWith, showFieldErrors } from '@/app/_forms/resolve-with';
@@ -59,7 +60,8 @@ export function SignInForm({ next }: { readonly next: string | null }) {
   );
 }
 
-function Refusal({ error: { problem, retryAfterSeconds } }: { readonly error: ProblemError }) {
+function Refusal({ error }: { readonly error: ProblemError }) {
+  const { problem, retryAfterSeconds } = error;
   const wait = retryAfterSeconds === null ? 'a moment' : formatWait(retryAfterSeconds);
   switch (problem.status) {
     case 401:
@@ -69,6 +71,6 @@ function Refusal({ error: { problem, retryAfterSeconds } }: { readonly error: Pr
     case 503:
       return <Notice tone="warning" title="The service cannot answer now.">Nothing is wrong with what you typed. Try again in {wait}.</Notice>;
     default:
-      return <Notice tone="error" title={`${problem.title}.`}>{problem.detail} {problem.request_id}</Notice>;
+      return <FailureNotice error={error} />;
   }
 }

@@ -8,16 +8,34 @@ import type { z } from 'zod';
 export interface Method {
   readonly id: string;
   readonly title: string;
+  /** LaTeX, one formula an entry, for the method's page. */
+  readonly formulas: readonly [string, ...string[]];
+  readonly symbols: readonly MethodSymbol[];
   /** Author, work, edition or year, equation or table number. */
   readonly source: string;
   readonly range: string;
   readonly accuracy: string;
 }
 
+/** A symbol of a method's formulas; `unit` is left out where it has none. */
+export interface MethodSymbol {
+  /** LaTeX. */
+  readonly symbol: string;
+  readonly meaning: string;
+  readonly unit?: string;
+}
+
 /** A method as one answer rested on it. */
 export interface MethodUse {
   readonly method: Method;
   readonly inRange: boolean;
+}
+
+/** Each method once, in range where every use of it was. */
+export function mergeMethods(uses: readonly MethodUse[]): MethodUse[] {
+  const merged = new Map<string, MethodUse>();
+  for (const use of uses) merged.set(use.method.id, { method: use.method, inRange: use.inRange && (merged.get(use.method.id)?.inRange ?? true) });
+  return [...merged.values()];
 }
 
 /** Something the caller should know about a number; `pointer` is RFC 6901, into the result or the input. */

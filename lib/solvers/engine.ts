@@ -1,2 +1,2 @@
 /** Moves with any change of a computed number; CHANGELOG.md says what moved and why. */
-export const engineVersion = '1.0.0';
+export const engineVersion = '1.1.0';

@@ -11,7 +11,24 @@ const methodShape = {
   accuracy: z.string().max(1000).meta({ description: 'How far off it may be in that range.', examples: ['1e-12 relative'] }),
 };
 
-export const methodSchema = z.object(methodShape).meta({ id: 'Method', description: 'One published way to compute something.' });
+const methodInBriefSchema = z.object(methodShape).meta({ id: 'MethodInBrief', description: 'One published way to compute something, without its formulas.' });
+
+export const methodSchema = z
+  .object({
+    ...methodShape,
+    formulas: z.array(z.string().max(2000).meta({ description: 'One formula, in LaTeX.', examples: [String.raw`\gamma = \sqrt{Z Y}`] })).min(1).max(20).meta({ description: 'Its formulas, in LaTeX.' }),
+    symbols: z
+      .array(
+        z.object({
+          symbol: z.string().max(200).meta({ description: 'The symbol, in LaTeX.', examples: [String.raw`\gamma`] }),
+          meaning: z.string().max(500).meta({ description: 'What it stands for.', examples: ['propagation constant'] }),
+          unit: z.string().max(40).optional().meta({ description: 'Its unit; left out where it has none.', examples: ['1/m'] }),
+        }),
+      )
+      .max(50)
+      .meta({ description: 'What the symbols of the formulas stand for.' }),
+  })
+  .meta({ id: 'Method', description: 'One published way to compute something.' });
 
 export const methodUseSchema = z
   .object({ ...methodShape, in_range: z.boolean().meta({ description: 'Whether this input lies in the range.', examples: [true] }) })
@@ -31,7 +48,7 @@ const jsonSchema = z.looseObject({}).meta({ id: 'JsonSchema', description: 'A JS
 export const calculationDescriptionSchema = z
   .object({
     ...summaryShape,
-    methods: z.array(methodSchema).max(50).meta({ description: 'What it may rest on.' }),
+    methods: z.array(methodInBriefSchema).max(50).meta({ description: 'What it may rest on.' }),
     input_schema: jsonSchema,
     output_schema: jsonSchema,
     examples: z

@@ -20,7 +20,7 @@ it('shows the answer that the engine gives to the call it shows', () => {
   expect(answer.result).toEqual(result);
   expect(answer.engine).toBe(engineVersion);
   expect(answer.digests).toEqual({ input: sha256(input), result: sha256(result) });
-  expect(answer.methods).toEqual(methods.map(({ method, inRange }) => ({ ...method, in_range: inRange })));
+  expect(answer.methods).toEqual(methods.map(({ method: { id, title, source, range, accuracy }, inRange }) => ({ id, title, source, range, accuracy, in_range: inRange })));
 });
 
 it('shows errors in the words of the API', () => {

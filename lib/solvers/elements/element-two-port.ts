@@ -1,5 +1,5 @@
 /** An element of a cascade as a two-port. */
-import { lineConstants, type Line } from '../lines/line';
+import type { LineConstants } from '../lines/line-constants';
 import { lineTwoPort } from '../methods/line-two-port';
 import { impedance, openStub, parallelParts, seriesParts, shortStub, type OnePort } from '../methods/one-port';
 import { propagation } from '../methods/telegrapher';
@@ -8,22 +8,20 @@ import { complexParts } from '../nouns/complex-number';
 import type { Phasor, Space } from '../numeric/phasor';
 import type { Element } from './element';
 
-export function elementTwoPort<T extends Phasor<T>>(space: Space<T>, element: Element, frequenciesHz: Float64Array, omega: Float64Array): TwoPort<T> {
-  const lineOf = (line: Line, lengthM: number) => {
-    const constants = lineConstants(line, frequenciesHz);
-    return lineTwoPort(space, constants, propagation(constants, frequenciesHz), lengthM);
-  };
+/** `constants` are those of the element's line, where it has one. */
+export function elementTwoPort<T extends Phasor<T>>(space: Space<T>, element: Element, constants: LineConstants | undefined, frequenciesHz: Float64Array, omega: Float64Array): TwoPort<T> {
+  const lineOf = (lengthM: number) => lineTwoPort(space, constants!, propagation(constants!, frequenciesHz), lengthM);
   switch (element.kind) {
     case 'line':
-      return lineElementTwoPort(space, lineOf(element.line, element.length_m));
+      return lineElementTwoPort(space, lineOf(element.length_m));
     case 'series':
       return seriesTwoPort(space, lumped(space, element, omega));
     case 'shunt':
       return shuntTwoPort(space, lumped(space, element, omega));
     case 'open_stub':
-      return shuntTwoPort(space, openStub(space, lineOf(element.line, element.length_m)));
+      return shuntTwoPort(space, openStub(space, lineOf(element.length_m)));
     case 'short_stub':
-      return shuntTwoPort(space, shortStub(space, lineOf(element.line, element.length_m)));
+      return shuntTwoPort(space, shortStub(space, lineOf(element.length_m)));
     case 'transformer':
       return transformerTwoPort(space, element.turns_ratio);
   }

@@ -1,12 +1,11 @@
 /** What to know about a line's model over the frequencies asked for. */
 import type { Warning } from '../calculation';
-import type { Line } from './line';
 
 /** Skin effect changes R by about a factor of three over a decade, so constants over more are a choice worth naming. */
 const decade = 10;
 
-export function lineWarnings(line: Line, frequenciesHz: Float64Array, pointer = '/line'): Warning[] {
-  if (line.kind !== 'rlgc' || (line.resistance_ohm_per_m === 0 && line.conductance_s_per_m === 0)) return [];
+/** Of a line whose R and G were given as the same at every frequency. */
+export function constantOverDecadeWarnings(frequenciesHz: Float64Array): Warning[] {
   const positive = frequenciesHz.filter((each) => each > 0);
   if (positive.length === 0) return [];
   let lowest = Infinity;
@@ -19,14 +18,14 @@ export function lineWarnings(line: Line, frequenciesHz: Float64Array, pointer = 
   return [
     {
       code: 'constants_over_decade',
-      pointer,
+      pointer: '',
       detail: `R and G are taken as constant from ${inHertz(lowest)} to ${inHertz(highest)}; the resistance of a real conductor grows with the root of frequency, and dielectric loss with frequency`,
     },
   ];
 }
 
 /** 1e8 as "100 MHz", for a sentence. */
-function inHertz(frequencyHz: number): string {
+export function inHertz(frequencyHz: number): string {
   const prefixes = ['', 'k', 'M', 'G', 'T', 'P'];
   const step = Math.max(0, Math.min(prefixes.length - 1, Math.floor(Math.log10(frequencyHz) / 3)));
   return `${Number((frequencyHz / 1000 ** step).toPrecision(6))} ${prefixes[step]}Hz`;

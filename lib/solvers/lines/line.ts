@@ -1,8 +1,12 @@
-/** Any line: the union of the kinds. A kind is one file and one line in each list here. */
+/** Any line: the union of the kinds. A kind is one file and one entry in the list here. */
 import { z } from 'zod';
-import type { LineConstants } from './line-constants';
+import { mergeMethods, type Method } from '../calculation';
+import { ImpossibleInput } from '../errors';
+import type { LineKind, LineModel } from './line-constants';
 import { lossless } from './lossless';
 import { rlgc } from './rlgc';
+
+const kinds = [rlgc, lossless] as const;
 
 export const line = z
   .discriminatedUnion('kind', [rlgc.schema, lossless.schema])
@@ -10,11 +14,25 @@ export const line = z
 
 export type Line = z.output<typeof line>;
 
-export function lineConstants(value: Line, frequenciesHz: Float64Array): LineConstants {
-  switch (value.kind) {
-    case 'rlgc':
-      return rlgc.constants(value, frequenciesHz);
-    case 'lossless':
-      return lossless.constants(value, frequenciesHz);
+/** Every method that a line's constants may rest on: what a calculation that takes a line adds to its own. */
+export const lineMethods: readonly Method[] = [...new Set(kinds.flatMap((kind): readonly Method[] => kind.methods))];
+
+const byKind: ReadonlyMap<string, LineKind> = new Map(kinds.map((kind) => [kind.schema.shape.kind.value, kind as unknown as LineKind]));
+
+/**
+ * A line over frequency. Range: any line that its schema accepts. `pointer` is where the line stands in the input: the pointers of warnings
+ * and refusals begin with it. Throws `ImpossibleInput` where the line cannot be at these frequencies.
+ */
+export function lineOverFrequency(value: Line, frequenciesHz: Float64Array, pointer = '/line'): LineModel {
+  const model = modelOf(byKind.get(value.kind)!, value, frequenciesHz, pointer);
+  return { ...model, methods: mergeMethods(model.methods), warnings: model.warnings.map((each) => ({ ...each, pointer: pointer + each.pointer })) };
+}
+
+function modelOf(kind: LineKind, value: Line, frequenciesHz: Float64Array, pointer: string): LineModel {
+  try {
+    return kind.model(value, frequenciesHz);
+  } catch (error) {
+    if (!(error instanceof ImpossibleInput)) throw error;
+    throw new ImpossibleInput(error.problems.map((problem) => ({ ...problem, pointer: pointer + problem.pointer })));
   }
 }

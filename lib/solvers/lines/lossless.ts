@@ -11,9 +11,10 @@ export const lossless = defineLineKind({
       velocity_factor: z.number().min(1e-3).max(1).meta({ title: 'Velocity factor', description: 'Phase velocity over the speed of light in vacuum.', examples: [0.66] }),
     })
     .meta({ id: 'LosslessLine', title: 'Lossless', description: 'A line without loss, given by its characteristic impedance and velocity factor.' }),
-  constants(line, { length }) {
+  methods: [],
+  model(line, { length }) {
     const impedance = line.characteristic_impedance_ohm;
     const velocity = line.velocity_factor * speedOfLightMPerS;
-    return constantConstants(length, 0, impedance / velocity, 0, 1 / (impedance * velocity));
+    return { constants: constantConstants(length, 0, impedance / velocity, 0, 1 / (impedance * velocity)), methods: [], warnings: [] };
   },
 });

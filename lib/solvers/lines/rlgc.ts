@@ -1,6 +1,7 @@
 /** A line given by its primary constants, taken as the same at every frequency. */
 import { z } from 'zod';
 import { constantConstants, defineLineKind } from './line-constants';
+import { constantOverDecadeWarnings } from './line-warnings';
 
 export const rlgc = defineLineKind({
   schema: z
@@ -12,6 +13,10 @@ export const rlgc = defineLineKind({
       capacitance_f_per_m: z.number().min(0).max(1e3).meta({ title: 'Capacitance', description: 'Shunt capacitance between the conductors.', examples: [1e-10], 'x-unit': 'F/m' }),
     })
     .meta({ id: 'RlgcLine', title: 'R, L, G, C constants', description: 'A line given by its primary constants, the same at every frequency.' }),
-  constants: (line, { length }) =>
-    constantConstants(length, line.resistance_ohm_per_m, line.inductance_h_per_m, line.conductance_s_per_m, line.capacitance_f_per_m),
+  methods: [],
+  model: (line, frequenciesHz) => ({
+    constants: constantConstants(frequenciesHz.length, line.resistance_ohm_per_m, line.inductance_h_per_m, line.conductance_s_per_m, line.capacitance_f_per_m),
+    methods: [],
+    warnings: line.resistance_ohm_per_m === 0 && line.conductance_s_per_m === 0 ? [] : constantOverDecadeWarnings(frequenciesHz),
+  }),
 });

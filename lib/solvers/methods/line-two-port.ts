@@ -16,6 +16,18 @@ export const telegrapherTwoPort: Method = {
   id: 'telegrapher-two-port',
   title: 'Two-port of a uniform line',
   source: 'Heaviside, Electrical Papers, vol. 2, 1892; Pozar, Microwave Engineering, 4th ed., section 2.3 and table 4.1 (numbers from memory)',
+  formulas: [
+    String.raw`\begin{pmatrix} V_1 \\ I_1 \end{pmatrix} = \begin{pmatrix} \cosh\gamma\ell & Z_c \sinh\gamma\ell \\ \sinh(\gamma\ell)/Z_c & \cosh\gamma\ell \end{pmatrix} \begin{pmatrix} V_2 \\ I_2 \end{pmatrix}`,
+    String.raw`p = e^{-2\gamma\ell}, \qquad e^{-\gamma\ell}\cosh\gamma\ell = \frac{1+p}{2}, \qquad e^{-\gamma\ell}\,\frac{\sinh\gamma\ell}{\gamma\ell} = \frac{1-p}{2\gamma\ell}`,
+  ],
+  symbols: [
+    { symbol: 'V_1, I_1', meaning: 'voltage and current at the near end', unit: 'V, A' },
+    { symbol: 'V_2, I_2', meaning: 'voltage and current at the far end, the current out of the line', unit: 'V, A' },
+    { symbol: String.raw`\gamma`, meaning: 'propagation constant', unit: '1/m' },
+    { symbol: String.raw`\ell`, meaning: 'length', unit: 'm' },
+    { symbol: 'Z_c', meaning: 'characteristic impedance', unit: 'ohm' },
+    { symbol: 'p', meaning: 'what a reflection at the far end is multiplied by on its way back' },
+  ],
   range: 'any frequency, length and loss, direct current included',
   accuracy: 'exact; 1e-12 relative in float64',
 };
@@ -55,8 +67,15 @@ export function lineTwoPort<T extends Phasor<T>>(space: Space<T>, constants: Lin
   const zeros = new Float64Array(space.length);
   const Zl = space.from(R.map((each) => each * lengthM), L.map((each, index) => each * omega[index] * lengthM));
   const Yl = space.from(G.map((each) => each * lengthM), C.map((each, index) => each * omega[index] * lengthM));
-  const ZlSlope = space.from(zeros, L.map((each) => each * lengthM));
-  const YlSlope = space.from(zeros, C.map((each) => each * lengthM));
+  const { slope } = constants;
+  const ZlSlope = space.from(
+    slope ? slope.resistance.map((each) => each * lengthM) : zeros,
+    L.map((each, index) => (each + (slope ? omega[index] * slope.inductance[index] : 0)) * lengthM),
+  );
+  const YlSlope = space.from(
+    slope ? slope.conductance.map((each) => each * lengthM) : zeros,
+    C.map((each, index) => (each + (slope ? omega[index] * slope.capacitance[index] : 0)) * lengthM),
+  );
 
   const size = magnitudes(space, theta);
   const vanishes = Uint8Array.from(size, (each) => (each === 0 ? 1 : 0));

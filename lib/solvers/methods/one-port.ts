@@ -11,6 +11,13 @@ export const lumpedImpedance: Method = {
   id: 'lumped-impedance',
   title: 'Impedance of ideal lumped parts',
   source: 'Z = R + j w L + 1/(j w C) in series, Y = 1/R + 1/(j w L) + j w C in parallel; Kirchhoff 1847, any text on circuits',
+  formulas: [String.raw`Z = R + j\omega L + \frac{1}{j\omega C}`, String.raw`Y = \frac{1}{R} + \frac{1}{j\omega L} + j\omega C`],
+  symbols: [
+    { symbol: 'R', meaning: 'resistance', unit: 'ohm' },
+    { symbol: 'L', meaning: 'inductance', unit: 'H' },
+    { symbol: 'C', meaning: 'capacitance', unit: 'F' },
+    { symbol: String.raw`\omega`, meaning: 'angular frequency', unit: 'rad/s' },
+  ],
   range: 'ideal parts, without parasitics, at any frequency',
   accuracy: 'exact; 1e-12 relative in float64',
 };

@@ -15,6 +15,16 @@ export const powerWaves: Method = {
   id: 'power-waves',
   title: 'Power waves with a complex reference impedance',
   source: 'Kurokawa, Power waves and the scattering matrix, IEEE Trans. MTT-13 (1965) 194-202 (equation numbers from memory)',
+  formulas: [
+    String.raw`a = \frac{V + Z_r I}{2\sqrt{\operatorname{Re} Z_r}}, \qquad b = \frac{V - Z_r^{*} I}{2\sqrt{\operatorname{Re} Z_r}}, \qquad \Gamma = \frac{b}{a} = \frac{Z - Z_r^{*}}{Z + Z_r}`,
+    String.raw`\mathrm{VSWR} = \frac{1 + |\Gamma|}{1 - |\Gamma|}, \qquad \text{return loss} = -20\log_{10}|\Gamma|`,
+  ],
+  symbols: [
+    { symbol: 'V, I', meaning: 'voltage and current at the port', unit: 'V, A' },
+    { symbol: 'Z_r', meaning: 'reference impedance', unit: 'ohm' },
+    { symbol: 'a, b', meaning: 'incident and reflected power wave', unit: 'sqrt W' },
+    { symbol: String.raw`\Gamma`, meaning: 'reflection coefficient' },
+  ],
   range: 'any impedance; reference impedances with a positive real part',
   accuracy: 'exact; 1e-12 relative in float64',
 };

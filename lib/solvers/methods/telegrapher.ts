@@ -12,6 +12,17 @@ export const telegrapherPropagation: Method = {
   id: 'telegrapher-propagation',
   title: 'Propagation constant and characteristic impedance from R, L, G, C',
   source: 'Heaviside, Electrical Papers, vol. 2, 1892; Pozar, Microwave Engineering, 4th ed., equations 2.5 to 2.7 (numbers from memory)',
+  formulas: [String.raw`\gamma = \alpha + j\beta = \sqrt{R + j\omega L}\,\sqrt{G + j\omega C}`, String.raw`Z_c = \frac{R + j\omega L}{\gamma}`, String.raw`v_p = \frac{\omega}{\beta}, \qquad \frac{1}{v_g} = \frac{d\beta}{d\omega}`],
+  symbols: [
+    { symbol: 'R', meaning: 'series resistance', unit: 'ohm/m' },
+    { symbol: 'L', meaning: 'series inductance', unit: 'H/m' },
+    { symbol: 'G', meaning: 'shunt conductance', unit: 'S/m' },
+    { symbol: 'C', meaning: 'shunt capacitance', unit: 'F/m' },
+    { symbol: String.raw`\omega`, meaning: 'angular frequency', unit: 'rad/s' },
+    { symbol: String.raw`\alpha`, meaning: 'attenuation', unit: 'Np/m' },
+    { symbol: String.raw`\beta`, meaning: 'phase constant', unit: 'rad/m' },
+    { symbol: 'Z_c', meaning: 'characteristic impedance', unit: 'ohm' },
+  ],
   range: 'any uniform line of two conductors in its transverse mode, at any frequency',
   accuracy: 'exact; 1e-12 relative in float64',
 };
@@ -34,6 +45,7 @@ export interface Propagation {
  * larger part is the root of a sum of like signs and the smaller follows from their product, b/2.
  */
 export function propagation(constants: LineConstants, frequenciesHz: Float64Array): Propagation {
+  const { slope } = constants;
   const length = frequenciesHz.length;
   const omega = frequenciesHz.map((frequency) => 2 * Math.PI * frequency);
   const attenuationNpPerM = new Float64Array(length);
@@ -63,6 +75,12 @@ export function propagation(constants: LineConstants, frequenciesHz: Float64Arra
       im[index] = (w * L * alpha - R * beta) / divisor;
       // d(gamma^2)/dw = -2 w L C + j (R C + L G), and d gamma = d(gamma^2) / (2 gamma).
       groupDelaySPerM[index] = ((R * C + L * G) * alpha + 2 * w * L * C * beta) / (2 * divisor);
+      if (slope) {
+        const [dR, dL, dG, dC] = [slope.resistance[index], slope.inductance[index], slope.conductance[index], slope.capacitance[index]];
+        const re = dR * G + R * dG - w * w * (dL * C + L * dC);
+        const im = w * (dR * C + R * dC + dL * G + L * dG);
+        groupDelaySPerM[index] += (im * alpha - re * beta) / (2 * divisor);
+      }
     } else {
       const seriesVanishes = R === 0 && w * L === 0;
       const shuntVanishes = G === 0 && w * C === 0;

@@ -17,6 +17,18 @@ export const twoPortConversion: Method = {
   id: 'two-port-conversion',
   title: 'Conversion between ABCD, S, Z, Y and T',
   source: 'Frickey, Conversions between S, Z, Y, h, ABCD and T parameters, IEEE Trans. MTT-42 (1994) 205-211, with Marks and Williams, MTT-43 (1995) 914-915 on its waves (from memory, checked by nodal analysis)',
+  formulas: [
+    String.raw`\Delta = A Z_2 + B + C Z_1 Z_2 + D Z_1`,
+    String.raw`S_{11} = \frac{A Z_2 + B - C Z_1^{*} Z_2 - D Z_1^{*}}{\Delta}, \qquad S_{21} = \frac{2\sqrt{R_1 R_2}}{\Delta}`,
+    String.raw`S_{12} = \frac{2 (AD - BC) \sqrt{R_1 R_2}}{\Delta}, \qquad S_{22} = \frac{-A Z_2^{*} + B - C Z_1 Z_2^{*} + D Z_1}{\Delta}`,
+    String.raw`\begin{pmatrix} b_1 \\ a_1 \end{pmatrix} = \begin{pmatrix} T_{11} & T_{12} \\ T_{21} & T_{22} \end{pmatrix} \begin{pmatrix} a_2 \\ b_2 \end{pmatrix}`,
+  ],
+  symbols: [
+    { symbol: 'A, B, C, D', meaning: 'transmission parameters', unit: '1, ohm, S, 1' },
+    { symbol: 'Z_1, Z_2', meaning: 'reference impedances of port 1 and port 2', unit: 'ohm' },
+    { symbol: 'R_1, R_2', meaning: 'their real parts', unit: 'ohm' },
+    { symbol: 'a_k, b_k', meaning: 'power waves into and out of port k', unit: 'sqrt W' },
+  ],
   range: 'reference impedances with a positive real part; a representation that does not exist is null',
   accuracy: 'exact; in float64 S to 1e-12 of a whole wave and losses to 1e-12 of themselves or 1e-14 dB',
 };

@@ -18,6 +18,16 @@ export const transmissionMatrix: Method = {
   id: 'transmission-matrix',
   title: 'ABCD parameters of elements and of their cascade',
   source: 'Pozar, Microwave Engineering, 4th ed., section 4.4 and table 4.1 (numbers from memory)',
+  formulas: [
+    String.raw`\text{series } Z: \begin{pmatrix} 1 & Z \\ 0 & 1 \end{pmatrix} \qquad \text{shunt } Y: \begin{pmatrix} 1 & 0 \\ Y & 1 \end{pmatrix} \qquad \text{transformer } n: \begin{pmatrix} n & 0 \\ 0 & 1/n \end{pmatrix}`,
+    String.raw`\begin{pmatrix} A & B \\ C & D \end{pmatrix} = \prod_k \begin{pmatrix} A_k & B_k \\ C_k & D_k \end{pmatrix}`,
+  ],
+  symbols: [
+    { symbol: 'Z', meaning: 'impedance in series with the path', unit: 'ohm' },
+    { symbol: 'Y', meaning: 'admittance across the path', unit: 'S' },
+    { symbol: 'n', meaning: 'turns ratio, V1 = n V2' },
+    { symbol: 'A, B, C, D', meaning: 'transmission parameters: V1 = A V2 + B I2, I1 = C V2 + D I2', unit: '1, ohm, S, 1' },
+  ],
   range: 'any chain of linear reciprocal two-ports',
   accuracy: 'exact; 1e-12 relative in float64',
 };

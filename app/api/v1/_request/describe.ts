@@ -13,7 +13,7 @@ export function describe(calculation: Calculation): Reply {
   if (text === undefined) {
     text = JSON.stringify({
       ...summaryOf(calculation),
-      methods: calculation.methods,
+      methods: calculation.methods.map(({ id, title, source, range, accuracy }) => ({ id, title, source, range, accuracy })),
       input_schema: z.toJSONSchema(calculation.input, { io: 'input' }),
       output_schema: z.toJSONSchema(calculation.output, { io: 'output' }),
       examples: calculation.examples.map(({ name, input, source }) => ({ name, input, source })),

@@ -1,8 +1,7 @@
 import { z } from 'zod';
-import { defineCalculation } from '../../calculation';
+import { defineCalculation, mergeMethods } from '../../calculation';
 import { decibelsPerNeper } from '../../constants';
-import { line, lineConstants } from '../../lines/line';
-import { lineWarnings } from '../../lines/line-warnings';
+import { line, lineMethods, lineOverFrequency } from '../../lines/line';
 import { propagation, telegrapherPropagation } from '../../methods/telegrapher';
 import { complexColumn, frequencyColumn, nullableColumn, realColumn } from '../../nouns/columns';
 import { frequenciesHz, frequency, pointsOf } from '../../nouns/frequency';
@@ -32,12 +31,12 @@ export const secondaryConstants = defineCalculation({
   summary: 'Propagation constant, attenuation, characteristic impedance, velocities, delay and wavelength of a line over frequency.',
   input,
   output,
-  methods: [telegrapherPropagation],
+  methods: [telegrapherPropagation, ...lineMethods],
   cost: { rule: '1 unit per started 1,000 points', units: ({ frequency_hz }) => Math.ceil(pointsOf(frequency_hz) / 1000) },
   solve({ line: given, frequency_hz }) {
     const frequencies = frequenciesHz(frequency_hz);
-    const constants = lineConstants(given, frequencies);
-    const waves = propagation(constants, frequencies);
+    const model = lineOverFrequency(given, frequencies);
+    const waves = propagation(model.constants, frequencies);
     const { omega, attenuationNpPerM: alpha, phaseRadPerM: beta, groupDelaySPerM, characteristicImpedance } = waves;
     // At direct current beta / omega is its limit: the group delay, finite or not.
     const delay = beta.map((each, index) => (omega[index] > 0 ? each / omega[index] : groupDelaySPerM[index]));
@@ -54,7 +53,7 @@ export const secondaryConstants = defineCalculation({
       delay_s_per_m: columns.real(delay, { pointer: '/delay_s_per_m', code: 'infinite_delay', reason: 'the delay grows without bound towards 0 Hz' }),
       wavelength_m: columns.real(beta.map((each) => (2 * Math.PI) / each), { pointer: '/wavelength_m', code: 'infinite_wavelength', reason: 'the phase does not turn along the line, so the wavelength is infinite' }),
     };
-    return { result, methods: [{ method: telegrapherPropagation, inRange: true }], warnings: [...columns.warnings, ...lineWarnings(given, frequencies)] };
+    return { result, methods: mergeMethods([{ method: telegrapherPropagation, inRange: true }, ...model.methods]), warnings: [...columns.warnings, ...model.warnings] };
   },
   examples: [
     {

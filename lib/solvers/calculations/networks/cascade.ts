@@ -1,9 +1,11 @@
 import { z } from 'zod';
-import { defineCalculation, type Method } from '../../calculation';
+import { defineCalculation, mergeMethods, type Method } from '../../calculation';
 import { element, elementProblems, type Element } from '../../elements/element';
 import { elementTwoPort } from '../../elements/element-two-port';
 import { ImpossibleInput, type InputProblem } from '../../errors';
-import { lineWarnings, turnWarnings } from '../../lines/line-warnings';
+import { lineMethods, lineOverFrequency } from '../../lines/line';
+import type { LineModel } from '../../lines/line-constants';
+import { turnWarnings } from '../../lines/line-warnings';
 import { telegrapherTwoPort } from '../../methods/line-two-port';
 import { impedance, lumpedImpedance } from '../../methods/one-port';
 import { powerWaves, reflection, returnLossDb } from '../../methods/reflection';
@@ -74,7 +76,7 @@ export const cascade = defineCalculation({
   summary: 'ABCD, S, Z, Y and T parameters, input impedance, insertion and return loss and group delay of a chain of elements over frequency.',
   input,
   output,
-  methods: [transmissionMatrix, twoPortConversion, powerWaves, telegrapherTwoPort, lumpedImpedance],
+  methods: [transmissionMatrix, twoPortConversion, powerWaves, telegrapherTwoPort, lumpedImpedance, ...lineMethods],
   cost: {
     rule: '1 unit per started 1,000 element-points (elements times frequencies)',
     units: ({ elements, frequency_hz }) => Math.ceil((elements.length * pointsOf(frequency_hz)) / 1000),
@@ -88,11 +90,13 @@ export const cascade = defineCalculation({
       ...sizeProblems(given.elements.length, frequencies.length),
     ]);
     const columns = new ResultColumns();
-    const { result, turns } = compute(given, frequencies, columns);
+    const models = given.elements.map((each, index) => ('line' in each ? lineOverFrequency(each.line, frequencies, `/elements/${index}/line`) : undefined));
+    const lines = models.filter((each) => each !== undefined);
+    const { result, turns } = compute(given, models, frequencies, columns);
     return {
       result,
-      methods: methodsOf(given.elements).map((method) => ({ method, inRange: true })),
-      warnings: [...columns.warnings, ...turnWarnings(turns, '/elements'), ...given.elements.flatMap((each, index) => ('line' in each ? lineWarnings(each.line, frequencies, `/elements/${index}/line`) : []))].slice(0, 100),
+      methods: mergeMethods([...methodsOf(given.elements).map((method) => ({ method, inRange: true })), ...lines.flatMap((each) => each.methods)]),
+      warnings: [...columns.warnings, ...turnWarnings(turns, '/elements'), ...lines.flatMap((each) => each.warnings)].slice(0, 100),
     };
   },
   examples: [
@@ -140,10 +144,10 @@ function methodsOf(elements: readonly Element[]): Method[] {
   return [transmissionMatrix, twoPortConversion, powerWaves, ...(hasLines ? [telegrapherTwoPort] : []), ...(hasParts ? [lumpedImpedance] : [])];
 }
 
-function compute({ elements, reference_impedance_ohm, termination: closedBy, include }: Input, frequencies: Float64Array, columns: ResultColumns) {
+function compute({ elements, reference_impedance_ohm, termination: closedBy, include }: Input, models: readonly (LineModel | undefined)[], frequencies: Float64Array, columns: ResultColumns) {
   const omega = frequencies.map((each) => 2 * Math.PI * each);
   return inSpaceOf(frequencies.length, (space) => {
-    const two = elements.map((each) => elementTwoPort(space, each, frequencies, omega)).reduce((first, second) => chain(space, first, second));
+    const two = elements.map((each, index) => elementTwoPort(space, each, models[index]?.constants, frequencies, omega)).reduce((first, second) => chain(space, first, second));
     const [reference1, reference2] = portReferences(reference_impedance_ohm);
     const z1 = space.constant(reference1);
     const z2 = space.constant(reference2);

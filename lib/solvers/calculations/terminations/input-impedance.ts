@@ -1,8 +1,9 @@
 import { z } from 'zod';
-import { defineCalculation } from '../../calculation';
+import { defineCalculation, mergeMethods } from '../../calculation';
 import { ImpossibleInput } from '../../errors';
-import { line, lineConstants, type Line } from '../../lines/line';
-import { lineWarnings, turnWarnings } from '../../lines/line-warnings';
+import { line, lineMethods, lineOverFrequency } from '../../lines/line';
+import type { LineConstants } from '../../lines/line-constants';
+import { turnWarnings } from '../../lines/line-warnings';
 import { powerIntoLine } from '../../methods/line-power';
 import { lineTwoPort, telegrapherTwoPort } from '../../methods/line-two-port';
 import { impedanceColumn, lumpedImpedance, oddScaleOf, type OnePort } from '../../methods/one-port';
@@ -52,15 +53,16 @@ export const inputImpedance = defineCalculation({
   summary: 'Input impedance and admittance of a terminated line over frequency, with the reflection at both ends, VSWR and return loss.',
   input,
   output,
-  methods: [telegrapherTwoPort, powerWaves, lumpedImpedance],
+  methods: [telegrapherTwoPort, powerWaves, lumpedImpedance, ...lineMethods],
   cost: { rule: '1 unit per started 1,000 points', units: ({ frequency_hz }) => Math.ceil(pointsOf(frequency_hz) / 1000) },
   solve(given) {
     const frequencies = frequenciesHz(given.frequency_hz);
     const problems = [...terminationProblems(given.termination, frequencies, '/termination'), ...referenceProblems(given.reference_impedance_ohm)];
     if (problems.length > 0) throw new ImpossibleInput(problems);
-    const { result, warnings } = compute(given.line, given.length_m, given.termination, frequencies, given.reference_impedance_ohm);
+    const model = lineOverFrequency(given.line, frequencies);
+    const { result, warnings } = compute(model.constants, given.length_m, given.termination, frequencies, given.reference_impedance_ohm);
     const methods = hasParts(given.termination) ? [telegrapherTwoPort, powerWaves, lumpedImpedance] : [telegrapherTwoPort, powerWaves];
-    return { result, methods: methods.map((method) => ({ method, inRange: true })), warnings: [...warnings, ...lineWarnings(given.line, frequencies)] };
+    return { result, methods: mergeMethods([...methods.map((method) => ({ method, inRange: true })), ...model.methods]), warnings: [...warnings, ...model.warnings] };
   },
   examples: [
     {
@@ -99,8 +101,7 @@ function hasParts(value: Termination): boolean {
   return typeof value === 'object' && 'kind' in value && value.kind !== 'table';
 }
 
-function compute(given: Line, lengthM: number, closedBy: Termination, frequencies: Float64Array, referenceOhm: ComplexNumber) {
-  const constants = lineConstants(given, frequencies);
+function compute(constants: LineConstants, lengthM: number, closedBy: Termination, frequencies: Float64Array, referenceOhm: ComplexNumber) {
   const waves = propagation(constants, frequencies);
   const { omega, characteristicImpedance: Zc } = waves;
   const columns = new ResultColumns();

@@ -64,7 +64,7 @@ const length = decades(-4, 1);
 const part = fc.record({ resistance_ohm: decades(-2, 4), inductance_h: decades(-12, -6), capacitance_f: decades(-15, -8) }, { requiredKeys: [] }).filter((each) => Object.keys(each).length > 0);
 const element = fc.oneof(
   fc.record({ kind: fc.constant('line'), line, length_m: length }),
-  fc.record({ kind: fc.constantFrom('open_stub', 'short_stub'), line, length_m: length }),
+  fc.record({ kind: fc.constantFrom('open_stub', 'short_stub', 'series_open_stub', 'series_short_stub'), line, length_m: length }),
   fc.tuple(fc.constantFrom('series', 'shunt'), fc.constantFrom('series', 'parallel'), part).map(([kind, connection, parts]) => ({ kind, connection, ...parts })),
   fc.record({ kind: fc.constant('transformer'), turns_ratio: decades(-1, 1) }),
 );

@@ -86,6 +86,10 @@ def nodal(case, omega, driven, z1, z2):
         elif kind == "shunt":
             z = complex_of(element["impedance_ohm"]) if "impedance_ohm" in element else parts_impedance(element, element.get("connection", "series"), omega)
             branches.append(("ground", nodes, None, z))
+        elif kind.startswith("series_"):
+            total = abcd_of_line(element["line"], element["length_m"], omega)
+            branches.append(("z", nodes, nodes + 1, total[0, 0] / total[1, 0] if kind == "series_open_stub" else total[0, 1] / total[1, 1]))
+            nodes += 1
         else:
             total = abcd_of_line(element["line"], element["length_m"], omega)
             if kind == "open_stub":
@@ -216,6 +220,7 @@ def cases():
         ("filter of resonators", [{"kind": "series", "inductance_h": 3e-8, "capacitance_f": 4e-11, "resistance_ohm": 0.2}, {"kind": "shunt", "inductance_h": 2e-8, "capacitance_f": 6e-11, "resistance_ohm": 4000, "connection": "parallel"}, {"kind": "series", "inductance_h": 3e-8, "capacitance_f": 4e-11, "connection": "parallel"}], 1.43e8, 50),
         ("attenuator", [{"kind": "series", "resistance_ohm": 16.61}, {"kind": "shunt", "resistance_ohm": 66.93}, {"kind": "series", "resistance_ohm": 16.61}], 1e6, 50),
         ("stubs", [{"kind": "open_stub", "line": CABLE, "length_m": 0.31}, {"kind": "line", "line": CABLE, "length_m": 0.22}, {"kind": "short_stub", "line": SEVENTY, "length_m": 0.41}], 2.2e8, 50),
+        ("series stubs", [{"kind": "series_open_stub", "line": CABLE, "length_m": 0.31}, {"kind": "line", "line": CABLE, "length_m": 0.22}, {"kind": "series_short_stub", "line": SEVENTY, "length_m": 0.41}], 2.2e8, 50),
         ("transformer", [{"kind": "transformer", "turns_ratio": 2}, {"kind": "line", "line": CABLE, "length_m": 0.6}, {"kind": "series", "impedance_ohm": {"re": 4, "im": -9}}], 1.7e8, [50, 12.5]),
         ("complex references", [{"kind": "line", "line": LOSSY, "length_m": 0.5}, {"kind": "shunt", "impedance_ohm": {"re": 200, "im": 90}}], 4e8, [{"re": 50, "im": 10}, {"re": 75, "im": -20}]),
         ("200 dB of loss", [{"kind": "line", "line": LOSSY, "length_m": 80}, {"kind": "shunt", "capacitance_f": 2e-12}], 1e8, 50),

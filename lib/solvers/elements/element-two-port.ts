@@ -22,6 +22,10 @@ export function elementTwoPort<T extends Phasor<T>>(space: Space<T>, element: El
       return shuntTwoPort(space, openStub(space, lineOf(element.length_m)));
     case 'short_stub':
       return shuntTwoPort(space, shortStub(space, lineOf(element.length_m)));
+    case 'series_open_stub':
+      return seriesTwoPort(space, openStub(space, lineOf(element.length_m)));
+    case 'series_short_stub':
+      return seriesTwoPort(space, shortStub(space, lineOf(element.length_m)));
     case 'transformer':
       return transformerTwoPort(space, element.turns_ratio);
   }

@@ -21,7 +21,7 @@ const lumpedElement = <Kind extends 'series' | 'shunt'>(kind: Kind, id: string, 
     })
     .meta({ id, title, description });
 
-const stubElement = <Kind extends 'open_stub' | 'short_stub'>(kind: Kind, id: string, title: string, description: string) =>
+const stubElement = <Kind extends 'open_stub' | 'short_stub' | 'series_open_stub' | 'series_short_stub'>(kind: Kind, id: string, title: string, description: string) =>
   z
     .strictObject({ kind: z.literal(kind).meta({ title: 'Kind', description, examples: [kind] }), line, length_m: lengthM })
     .meta({ id, title, description });
@@ -40,6 +40,8 @@ export const element = z
     lumpedElement('shunt', 'ShuntElement', 'In shunt', 'An impedance or parts across the path.'),
     stubElement('open_stub', 'OpenStubElement', 'Open stub', 'A line across the path, open at its end.'),
     stubElement('short_stub', 'ShortStubElement', 'Shorted stub', 'A line across the path, shorted at its end.'),
+    stubElement('series_open_stub', 'SeriesOpenStubElement', 'Open series stub', 'A line in series with the path, open at its end.'),
+    stubElement('series_short_stub', 'SeriesShortStubElement', 'Shorted series stub', 'A line in series with the path, shorted at its end.'),
     transformerElement,
   ])
   .meta({ id: 'Element', title: 'Element', description: 'One element of a cascade.' });

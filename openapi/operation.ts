@@ -50,6 +50,7 @@ export interface Operation<
 export const tags = {
   Calculations: 'What the service computes: one POST a calculation.',
   Catalogue: 'What there is to compute, with schemas, examples, methods and sources.',
+  Tables: 'Materials and wire gauges, with their sources.',
   Keys: 'API keys of the organization; for signed-in members.',
   Calls: 'The call log.',
   Usage: 'Units used against quota.',

@@ -1,4 +1,5 @@
 /** Scales that no factor can express: a wire gauge, a level against a milliwatt, degrees Fahrenheit. */
+import { awgSize, readAwg } from '../solvers/gauges';
 import { readDecimal } from './decimal';
 import { refuse } from './refusal';
 import { sameDimensions, type Dimensions } from './units';
@@ -28,17 +29,8 @@ export function readSpecialScale(text: string, wanted: Dimensions, wantedName: s
   return undefined;
 }
 
-/** ASTM B258: 39 steps from 36 AWG, 0.127 mm, to 0000 AWG, 92 times as thick. 00, 000 and 0000 count as -1, -2 and -3. */
-function gaugeDiameter(number: string): number {
-  const gauge = gaugeNumber(number);
-  return 0.127e-3 * 92 ** ((36 - gauge) / 39);
-}
-
-function gaugeNumber(number: string): number {
-  const aught = /^([1-4])\/0$/.exec(number);
-  if (aught) return 1 - Number(aught[1]);
-  if (/^0{1,4}$/.test(number)) return 1 - number.length;
-  const gauge = Number(number);
-  if (!Number.isInteger(gauge) || gauge < 1 || gauge > 56) refuse(`AWG runs from 4/0 (0000) to 56 in whole numbers; got ${number}`);
-  return gauge;
+function gaugeDiameter(text: string): number {
+  const number = readAwg(text);
+  if (number === undefined) refuse(`AWG runs from 4/0 (0000) to 56 in whole numbers; got ${text}`);
+  return awgSize(number).diameterM;
 }

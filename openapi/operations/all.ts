@@ -7,6 +7,7 @@ import { describeCalculation, listCalculations, listMethods, readMethod } from '
 import { changeKey, issueKey, listKeys, readKey, revokeKey } from './keys';
 import { readDocument, readHealth, readReadiness } from './service';
 import { readSession, signIn, signOut } from './session';
+import { listGauges, listMaterials, readAwgGauge, readMetricGauge } from './tables';
 import { readUsage } from './usage';
 
 // An operation's precise schema types matter to its own route only.
@@ -15,6 +16,10 @@ const declared = [
   describeCalculation,
   listMethods,
   readMethod,
+  listMaterials,
+  listGauges,
+  readAwgGauge,
+  readMetricGauge,
   listCalls,
   readCall,
   readUsage,

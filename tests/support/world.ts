@@ -66,6 +66,8 @@ function parameterValue(name: string, { callId }: World, keyId: string): string 
     group: 'terminations',
     calculation: findCalculation('terminations', 'input-impedance')!.id,
     method: methods[0]!.id,
+    number: '24',
+    mm2: '1.5',
   };
   const value = values[name];
   if (value === undefined) throw new Error(`no value is known for the path parameter ${name}`);
@@ -93,6 +95,8 @@ export function pathOfNothing(operation: Operation): string {
     group: 'lines',
     calculation: 'no-such-calculation',
     method: 'no-such-method',
+    number: '99',
+    mm2: '0',
   };
   return `/api/v1${operation.path.replace(/\{(\w+)\}/g, (_, name: string) => unknown[name]!)}`;
 }

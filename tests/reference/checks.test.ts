@@ -7,6 +7,7 @@ import { existsSync, readdirSync, readFileSync } from 'node:fs';
 import { fileURLToPath } from 'node:url';
 import { promisify } from 'node:util';
 import { describe, expect, it } from 'vitest';
+import type { z } from 'zod';
 import { calculationPath } from '@/lib/solvers/calculation';
 import { calculations } from '@/lib/solvers/registry';
 import { checkFiles, runCheck, type CheckFile } from '@/lib/verification/checks';
@@ -34,12 +35,24 @@ function canImportMpmath(): boolean {
   }
 }
 
+/** What an answer only repeats of its input, or says in words. */
+const isGiven = new Set(['frequency_hz', 't_order']);
+
 describe('the reference data', () => {
   const checks = checkFiles.flatMap((file) => file.checks);
 
   it('are at least ten checks for every calculation', () => {
     const few = calculations.map((each) => ({ calculation: calculationPath(each), checks: checks.filter(({ calculation }) => calculation === calculationPath(each)).length })).filter((each) => each.checks < 10);
     expect(few).toEqual([]);
+  });
+
+  it('hold a value for every quantity that a calculation answers', () => {
+    const missing = calculations.flatMap((each) => {
+      const path = calculationPath(each);
+      const seen = new Set(checks.filter(({ calculation }) => calculation === path).flatMap(({ expected }) => Object.keys(expected).map((pointer) => pointer.split('/')[1])));
+      return Object.keys((each.output as z.ZodObject).shape).filter((name) => !seen.has(name) && !isGiven.has(name)).map((name) => `${path} ${name}`);
+    });
+    expect(missing).toEqual([]);
   });
 
   it('name a source, and a reason for every exception', () => {

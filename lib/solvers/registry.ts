@@ -2,9 +2,10 @@
 import type { Calculation, Method } from './calculation';
 import { secondaryConstants } from './calculations/lines/secondary-constants';
 import { cascade } from './calculations/networks/cascade';
+import { convert } from './calculations/networks/convert';
 import { inputImpedance } from './calculations/terminations/input-impedance';
 
-export const calculations: readonly Calculation[] = [secondaryConstants, inputImpedance, cascade];
+export const calculations: readonly Calculation[] = [secondaryConstants, inputImpedance, cascade, convert];
 
 export function findCalculation(group: string, id: string): Calculation | undefined {
   return calculations.find((calculation) => calculation.group === group && calculation.id === id);

@@ -5,24 +5,32 @@ import type { ComplexParts } from '../numeric/phasor';
 /** Generous for any impedance, and far from where products overflow. */
 const largest = 1e12;
 
-const rectangularComplex = z
-  .strictObject({
-    re: z.number().min(-largest).max(largest).meta({ title: 'Real part', description: 'Real part, in the unit of the quantity.', examples: [75] }),
-    im: z.number().min(-largest).max(largest).meta({ title: 'Imaginary part', description: 'Imaginary part, in the unit of the quantity.', examples: [-30] }),
-  })
-  .meta({ id: 'RectangularComplex', title: 'Rectangular form', description: 'A complex number by its real and imaginary parts.', examples: [{ re: 75, im: -30 }] });
+const number = (most: number, title: string, description: string, example: number) => z.number().min(-most).max(most).meta({ title, description, examples: [example] });
 
-const polarComplex = z
-  .strictObject({
-    magnitude: z.number().min(0).max(largest).meta({ title: 'Magnitude', description: 'Magnitude, in the unit of the quantity.', examples: [80.8] }),
-    angle_deg: z.number().min(-360).max(360).meta({ title: 'Angle', description: 'Angle from the real axis.', examples: [-21.8], 'x-unit': 'deg' }),
-  })
-  .meta({ id: 'PolarComplex', title: 'Polar form', description: 'A complex number by its magnitude and angle.', examples: [{ magnitude: 80.8, angle_deg: -21.8 }] });
+const rectangular = (most: number, id: string) =>
+  z
+    .strictObject({
+      re: number(most, 'Real part', 'Real part, in the unit of the quantity.', 75),
+      im: number(most, 'Imaginary part', 'Imaginary part, in the unit of the quantity.', -30),
+    })
+    .meta({ id, title: 'Rectangular form', description: 'A complex number by its real and imaginary parts.', examples: [{ re: 75, im: -30 }] });
 
-const realNumber = z.number().min(-largest).max(largest).meta({ title: 'Real number', description: 'A number without imaginary part.', examples: [50] });
+const polar = (most: number, id: string) =>
+  z
+    .strictObject({
+      magnitude: z.number().min(0).max(most).meta({ title: 'Magnitude', description: 'Magnitude, in the unit of the quantity.', examples: [80.8] }),
+      angle_deg: z.number().min(-360).max(360).meta({ title: 'Angle', description: 'Angle from the real axis.', examples: [-21.8], 'x-unit': 'deg' }),
+    })
+    .meta({ id, title: 'Polar form', description: 'A complex number by its magnitude and angle.', examples: [{ magnitude: 80.8, angle_deg: -21.8 }] });
+
+const real = (most: number) => number(most, 'Real number', 'A number without imaginary part.', 50);
 
 /** The three forms, for unions that take further ones. */
-export const complexForms = [realNumber, rectangularComplex, polarComplex] as const;
+export const complexForms = [real(largest), rectangular(largest, 'RectangularComplex'), polar(largest, 'PolarComplex')] as const;
+
+/** The matrix of a chain that passes next to nothing has entries beyond any impedance: 1e60 stands at 1200 dB. */
+export const largestEntry = 1e60;
+export const matrixEntryForms = [real(largestEntry), rectangular(largestEntry, 'RectangularEntry'), polar(largestEntry, 'PolarEntry')] as const;
 
 export const complexNumber = z
   .union(complexForms)

@@ -6,7 +6,7 @@ import { calculations } from '@/lib/solvers/registry';
 import { createKey, createOrganization } from '../support/accounts';
 import { call, type Answer } from '../support/client';
 import { document, requestValidator } from '../support/document';
-import { rightBodies, strangeTexts, wrongBodies } from '../support/generated-bodies';
+import { bodiesLike, rightBodies, strangeTexts, wrongBodies } from '../support/generated-bodies';
 import type { Json } from '../support/json';
 
 const fixedSeed = 20_261_201;
@@ -23,9 +23,11 @@ afterAll(closeDatabase);
 /**
  * Refusals that JSON Schema cannot express, each by its code: a sweep that runs backwards or starts a
  * logarithm at zero, a table out of order or of unequal columns, parts without any part or beside a whole
- * impedance, frequencies outside a table, a reference that takes no power, a cascade too large for one call.
+ * impedance, frequencies outside a table, a reference that takes no power, a cascade too large for one call; of a sought
+ * dimension bounds the wrong way round, a name of another kind of line, one missing beside it, an impedance or bounds out of reach.
  */
-const crossFieldCodes = new Set(['sweep_order', 'log_from_zero', 'not_ascending', 'length_differs', 'no_parts', 'excluded', 'outside_table', 'reference_without_resistance', 'too_large', 'wrong_count']);
+const crossFieldCodes = new Set(['sweep_order', 'log_from_zero', 'not_ascending', 'length_differs', 'no_parts', 'excluded', 'outside_table', 'reference_without_resistance', 'too_large', 'wrong_count',
+  'bounds_order', 'not_a_dimension', 'required_dimension', 'out_of_bounds', 'out_of_reach', 'no_line', 'infinite_impedance']);
 
 /** The place itself, or the object or list from which the named child is missing. */
 function resolves(root: Json, pointer: string): boolean {
@@ -97,6 +99,7 @@ for (const calculation of calculations) {
 
   const texts = fc.oneof(
     { weight: 6, arbitrary: rightBodies(schema).map((body) => JSON.stringify(body)) },
+    { weight: 4, arbitrary: bodiesLike(calculation.examples.map(({ input }) => input)).map((body) => JSON.stringify(body)) },
     { weight: 10, arbitrary: wrongBodies(schema).map((body) => JSON.stringify(body)) },
     { weight: 1, arbitrary: fc.tuple(rightBodies(schema), strangeTexts).map(([body, change]) => change(JSON.stringify(body))) },
     { weight: 1, arbitrary: fc.jsonValue({ maxDepth: 6 }).map((body) => JSON.stringify(body)) },

@@ -4,7 +4,7 @@ import { z } from 'zod';
 import { operations } from '@/openapi/operations/all';
 import { buildDocument } from '@/openapi/document';
 import { document, requestValidator } from '../../support/document';
-import { rightBodies, wrongBodies } from '../../support/generated-bodies';
+import { bodiesLike, rightBodies, wrongBodies } from '../../support/generated-bodies';
 import type { Json } from '../../support/json';
 
 const seed = 4711;
@@ -34,11 +34,13 @@ describe('the published document', () => {
     // zod's own account of the schema: where the document is narrower, only bodies made from this one show it.
     const own = z.toJSONSchema(operation.body!, { io: 'input' });
 
+    const examples = Object.values(operation.bodyExamples ?? {}).map(({ value }) => value as Json);
+
     test(`accepts for ${operation.id} what the validator accepts, and refuses what it refuses`, () => {
       let accepted = 0;
       let refused = 0;
       fc.assert(
-        fc.property(fc.oneof(rightBodies(schema), wrongBodies(schema), rightBodies(own, own), wrongBodies(own, own)), (generated) => {
+        fc.property(fc.oneof(rightBodies(schema), wrongBodies(schema), rightBodies(own, own), wrongBodies(own, own), bodiesLike(examples)), (generated) => {
           // Through text, as a body comes.
           const body = JSON.parse(JSON.stringify(generated));
           const parsed = operation.body!.safeParse(body, { reportInput: true });

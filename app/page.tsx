@@ -2,18 +2,19 @@
 import { headers } from 'next/headers';
 import Link from 'next/link';
 import { calculationPath, groups } from '@/lib/solvers/calculation';
-import { calculations } from '@/lib/solvers/registry';
+import { calculations, methods } from '@/lib/solvers/registry';
+import { declaredCounts } from '@/lib/verification/record';
 import { ButtonLink } from './_components/button';
 import { CodeBlock } from './_components/code-block';
 import { Figure, Figures } from './_components/figure';
 import { PairRule } from './_components/pair-rule';
 import { PublicFrame } from './_components/public-frame';
-import { engineeringComplex, formatPolar, formatQuantity, significant } from './_format/numbers';
+import { engineeringComplex, formatCount, formatPolar, formatQuantity, significant } from './_format/numbers';
 import { curlCommand } from './_format/curl';
+import { groupTitles } from './_format/group-titles';
+import { sentence } from './_format/sentence';
 import { complexAt, exampleCall, type ExampleCall } from './_front/example-call';
 import { ImpedanceDrawing } from './_front/impedance-drawing';
-
-const groupWords = { lines: 'Lines', terminations: 'Terminations', networks: 'Networks' } as const;
 
 export default async function FrontPage() {
   const origin = await ownOrigin();
@@ -34,6 +35,7 @@ export default async function FrontPage() {
       </div>
       {call && <Shown call={call} origin={origin} />}
       <Catalogue />
+      <Proof />
       <Promises />
     </PublicFrame>
   );
@@ -68,7 +70,9 @@ function Shown({ call, origin }: { readonly call: ExampleCall; readonly origin: 
             {methods.map(({ method, inRange }) => (
               <li key={method.id} className="border-b border-rule py-2.5 text-small">
                 <span className="flex flex-wrap justify-between gap-x-5">
-                  <b className="font-[550]">{method.title}</b>
+                  <Link href={`/methods/${method.id}`} prefetch={false} className="font-[550] hover:text-copper hover:underline hover:underline-offset-3">
+                    {method.title}
+                  </Link>
                   <span className={inRange ? 'text-patina' : 'text-ochre'}>{inRange ? 'in range' : 'out of range'}</span>
                 </span>
                 <span className="block text-ash">
@@ -107,7 +111,7 @@ function Catalogue() {
       <div className="grid gap-8">
         {groups.map((group) => (
           <div key={group} className="grid gap-x-8 gap-y-2 sm:grid-cols-[9rem_1fr]">
-            <h3 className="font-[550]">{groupWords[group]}</h3>
+            <h3 className="font-[550]">{groupTitles[group]}</h3>
             <dl className="grid gap-x-8 gap-y-3 lg:grid-cols-2">
               {calculations
                 .filter((calculation) => calculation.group === group)
@@ -120,6 +124,35 @@ function Catalogue() {
             </dl>
           </div>
         ))}
+      </div>
+    </section>
+  );
+}
+
+/** Counted, not computed: the first look at the front page waits for no check. */
+function Proof() {
+  const { checks, values } = declaredCounts();
+  return (
+    <section aria-labelledby="proof" className="mt-14">
+      <h2 id="proof" className="text-heading font-semibold">
+        Proof, not trust
+      </h2>
+      <PairRule className="mt-2.5 mb-5" />
+      <div className="flex flex-wrap items-start justify-between gap-x-11 gap-y-5">
+        <div className="max-w-measure">
+          <p>
+            Values from textbooks, standards and references of 30 digits, each made by another route than the engine’s, are computed again by the engine that answers you, and shown beside what was published: the digits, the difference, and what is allowed.
+          </p>
+          <div className="mt-5 flex flex-wrap gap-3">
+            <ButtonLink href="/verification">Verification</ButtonLink>
+            <ButtonLink href="/methods">Methods</ButtonLink>
+          </div>
+        </div>
+        <Figures>
+          <Figure label="Checks" value={formatCount(checks)} />
+          <Figure label="Published values" value={formatCount(values)} />
+          <Figure label="Methods" value={formatCount(methods.length)} />
+        </Figures>
       </div>
     </section>
   );
@@ -156,12 +189,6 @@ function Promises() {
       </p>
     </section>
   );
-}
-
-/** Ends a method's clause as a sentence, whichever way it was written. */
-function sentence(clause: string, capital = true): string {
-  const text = capital ? clause.charAt(0).toUpperCase() + clause.slice(1) : clause;
-  return /[.!?]$/.test(text) ? text : `${text}.`;
 }
 
 /** As the reader reached us, so that the command works where it is pasted. */

@@ -5,7 +5,8 @@ import path from 'node:path';
 import { repository, run } from './processes.mjs';
 import { StepFailure } from './steps.mjs';
 
-const folders = ['app', 'lib', 'db', 'openapi', 'public'];
+// The reference data are part of the build: the verification page shows them.
+const folders = ['app', 'lib', 'db', 'openapi', 'public', 'tests/reference'];
 /** Written by the build itself, or no part of it. */
 const ignored = new Set(['next-env.d.ts', 'vitest.config.ts', 'eslint.config.mjs']);
 

@@ -31,6 +31,12 @@ export const rooms = [
   },
   { room: 'db', ours: ['db', 'knexfile'], because: 'db holds queries and knows nothing of who asks or why' },
   { room: 'lib/auth', ours: ['lib/auth', 'db'], because: 'who may do what must not depend on what is computed or how it is answered' },
+  {
+    room: 'lib/verification',
+    ours: ['lib/verification', 'lib/solvers', 'tests/reference'],
+    packages: [],
+    because: 'what is shown as proof is the engine and the reference data, and nothing that could come between them',
+  },
   { room: 'lib', never: ['app', 'openapi', 'next/server'], because: 'lib is what routes and pages stand on, never the other way round' },
   {
     room: 'openapi',

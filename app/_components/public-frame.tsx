@@ -8,6 +8,13 @@ import { SkipLink } from './skip-link';
 import { asTheme, themeCookie } from './theme';
 import { ThemeSwitch } from './theme-switch';
 
+const places = [
+  { href: '/reference', title: 'Reference' },
+  { href: '/methods', title: 'Methods' },
+  { href: '/verification', title: 'Verification' },
+  { href: '/problems', title: 'Problems' },
+] as const;
+
 interface PublicFrameProps {
   /** False on the sign-in page itself. */
   readonly signIn?: boolean;
@@ -22,13 +29,12 @@ export async function PublicFrame({ signIn = true, children }: PublicFrameProps)
       <SkipLink />
       <header className="flex flex-wrap items-baseline gap-x-7 gap-y-1.5 pt-5 pb-3">
         <Mark />
-        <nav aria-label="Site" className="order-last flex w-full gap-[22px] text-ash sm:order-none sm:w-auto">
-          <Link href="/reference" className="hover:text-ink">
-            Reference
-          </Link>
-          <Link href="/problems" className="hover:text-ink">
-            Problems
-          </Link>
+        <nav aria-label="Site" className="order-last flex w-full flex-wrap gap-x-[22px] text-ash sm:order-none sm:w-auto">
+          {places.map(({ href, title }) => (
+            <Link key={href} href={href} className="hover:text-ink">
+              {title}
+            </Link>
+          ))}
         </nav>
         <div className="ml-auto flex items-baseline gap-5 text-small">
           <ThemeSwitch initial={theme} />
@@ -43,7 +49,16 @@ export async function PublicFrame({ signIn = true, children }: PublicFrameProps)
       <main id="content" className="flex-1">
         {children}
       </main>
-      <footer className="pt-12 pb-6 text-fine text-ash">Engine {engineVersion}</footer>
+      <footer className="flex flex-wrap items-baseline justify-between gap-x-7 gap-y-1.5 pt-12 pb-6 text-fine text-ash">
+        <span>Engine {engineVersion}</span>
+        <nav aria-label="Site, at the foot" className="flex flex-wrap gap-x-5">
+          {places.map(({ href, title }) => (
+            <Link key={href} href={href} className="hover:text-ink">
+              {title}
+            </Link>
+          ))}
+        </nav>
+      </footer>
     </div>
   );
 }

@@ -14,6 +14,9 @@ export const line = z
 
 export type Line = z.output<typeof line>;
 
+/** What the kinds are called, and what each may rest on. */
+export const lineKinds: readonly Pick<LineKind, 'schema' | 'methods'>[] = kinds;
+
 /** Every method that a line's constants may rest on: what a calculation that takes a line adds to its own. */
 export const lineMethods: readonly Method[] = [...new Set(kinds.flatMap((kind): readonly Method[] => kind.methods))];
 

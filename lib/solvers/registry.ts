@@ -4,8 +4,9 @@ import { secondaryConstants } from './calculations/lines/secondary-constants';
 import { cascade } from './calculations/networks/cascade';
 import { convert } from './calculations/networks/convert';
 import { inputImpedance } from './calculations/terminations/input-impedance';
+import { matching } from './calculations/terminations/matching';
 
-export const calculations: readonly Calculation[] = [secondaryConstants, inputImpedance, cascade, convert];
+export const calculations: readonly Calculation[] = [secondaryConstants, inputImpedance, matching, cascade, convert];
 
 export function findCalculation(group: string, id: string): Calculation | undefined {
   return calculations.find((calculation) => calculation.group === group && calculation.id === id);

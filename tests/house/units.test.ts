@@ -38,6 +38,7 @@ const suffixes: [ending: string, unit: string][] = [
 const isOfSiemens = /(conductance|admittance|susceptance)/;
 
 function unitByName(name: string): string | null {
+  if (isAtLevel(name)) return null;
   const unit = suffixes.find(([ending]) => name.endsWith(ending))?.[1];
   if (unit === undefined) return null;
   return isOfSiemens.test(name) ? unit.replace(/^s/, 'S') : unit;
@@ -45,8 +46,10 @@ function unitByName(name: string): string | null {
 
 /** Parts of a quantity: the field that holds them names the unit. */
 const parts = new Set(['re', 'im', 'magnitude', 'start', 'stop']);
+/** A bandwidth at a level: the level's unit ends the name, and the field that holds it names the unit of the width. */
+const isAtLevel = (name: string): boolean => /^at_\d+_db$/.test(name);
 /** Names that the contract gives without a suffix, for what they hold is more than a number of that unit. */
-const nouns = new Set(['termination', 'values']);
+const nouns = new Set(['termination', 'values', 'band']);
 /** In an entry of a two-port's matrix the letter is the quantity. */
 const isMatrixEntry = (name: string): boolean => /^([abcd]|[zyst][12][12])$/.test(name);
 
@@ -123,7 +126,7 @@ describe.each(calculations.map((calculation) => [calculationPath(calculation), c
   it('ends a name in the unit that is declared', () => {
     const wrong = fields
       .filter(({ name, units }) => units.size > 0 && unitByName(name) === null && !nouns.has(name) && !isMatrixEntry(name))
-      .filter(({ name, units, unitAbove }) => !(parts.has(name) && (unitAbove === null || units.has(unitAbove))))
+      .filter(({ name, units, unitAbove }) => !((parts.has(name) || isAtLevel(name)) && (unitAbove === null || units.has(unitAbove))))
       .map(({ path: where, units }) => ({ where, declared: [...units].join(' or ') }));
     expect(wrong).toEqual([]);
   });

@@ -39,14 +39,14 @@ const tableTermination = z
   })
   .meta({ id: 'TableTermination', title: 'Table', description: 'Impedance over frequency.' });
 
+const seriesRlcTermination = partsTermination('series_rlc', 'SeriesRlcTermination', 'Resistance, inductance and capacitance in series');
+const parallelRlcTermination = partsTermination('parallel_rlc', 'ParallelRlcTermination', 'Resistance, inductance and capacitance in parallel');
+
+/** What has a finite impedance: a termination without its names. */
+export const impedanceForms = [...complexForms, seriesRlcTermination, parallelRlcTermination, tableTermination] as const;
+
 export const termination = z
-  .union([
-    ...complexForms,
-    namedTermination,
-    partsTermination('series_rlc', 'SeriesRlcTermination', 'Resistance, inductance and capacitance in series'),
-    partsTermination('parallel_rlc', 'ParallelRlcTermination', 'Resistance, inductance and capacitance in parallel'),
-    tableTermination,
-  ])
+  .union([...complexForms, namedTermination, seriesRlcTermination, parallelRlcTermination, tableTermination])
   .meta({ id: 'Termination', title: 'Termination', description: 'An impedance, open, short, matched, parts in series or in parallel, or a table.', examples: [{ re: 75, im: -30 }, 'open'], 'x-unit': 'ohm' });
 
 export type Termination = z.output<typeof termination>;

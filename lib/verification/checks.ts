@@ -3,6 +3,7 @@
  * tests/reference, each file made by the generator beside it; the tests and the public page read the same.
  */
 import { findCalculation } from '../solvers/registry';
+import matching from '../../tests/reference/matching.json';
 import networks from '../../tests/reference/networks.json';
 import telegrapher from '../../tests/reference/telegrapher.json';
 
@@ -31,7 +32,7 @@ export interface CheckFile {
   readonly checks: readonly Check[];
 }
 
-export const checkFiles: readonly CheckFile[] = [telegrapher, networks] as unknown as readonly CheckFile[];
+export const checkFiles: readonly CheckFile[] = [telegrapher, networks, matching] as unknown as readonly CheckFile[];
 
 /** A value as the engine computes it now. */
 export type ComputedValue = number | boolean | string | null | { readonly re: number; readonly im: number };

@@ -35,6 +35,20 @@ function reflectionByCascade({ elements }: Solution, load: object | number, sour
   return z.re.map((re, index) => Math.hypot(re - source.re, z.im[index] + source.im) / Math.hypot(re + source.re, z.im[index] + source.im));
 }
 
+/** The nearest frequency on one side of the design frequency where |Gamma| by the cascade passes the limit: steps, then halves. */
+function edgeByCascade(solution: Solution, load: object, side: 1 | -1, limit: number): number {
+  const source = { re: 50, im: 0 };
+  const steps = Array.from({ length: 900 }, (_, index) => frequency_hz * (1 + (side * (index + 1)) / 1000));
+  const index = reflectionByCascade(solution, load, source, steps).findIndex((each) => each > limit);
+  let [inside, outside] = [index === 0 ? frequency_hz : steps[index - 1], steps[index]];
+  for (let halving = 0; halving < 60; halving++) {
+    const middle = (inside + outside) / 2;
+    if (reflectionByCascade(solution, load, source, middle)[0] <= limit) inside = middle;
+    else outside = middle;
+  }
+  return (inside + outside) / 2;
+}
+
 const decades = (low: number, high: number) => fc.double({ min: low, max: high, noNaN: true }).map((exponent) => 10 ** exponent);
 const reactance = fc.oneof({ weight: 1, arbitrary: fc.constant(0) }, { weight: 4, arbitrary: fc.double({ min: -300, max: 300, noNaN: true }) });
 const impedance = fc.record({ re: decades(0, 3), im: reactance });
@@ -62,6 +76,7 @@ describe('every match', () => {
         }
         expect(new Set(solutions.map(({ topology, elements }) => topology + JSON.stringify(elements))).size).toBe(solutions.length);
       }),
+      80,
     );
   });
 
@@ -198,6 +213,23 @@ describe('a quarter wave', () => {
 
 describe('the bandwidth', () => {
   const limitOf = { at_10_db: 10, at_20_db: 20 } as const;
+  it('ends where the public cascade has exactly 10 or 20 dB of return loss', () => {
+    const load = fc.record({ kind: fc.constant('series_rlc'), resistance_ohm: decades(1, 2.3), inductance_h: decades(-8.5, -7.5), capacitance_f: decades(-11.5, -10.5) });
+    run(
+      fc.property(load, fc.oneof(lossless, lossy), fc.constantFrom('l_section', 'single_shunt_stub', 'single_series_stub'), (given, line, topology) => {
+        for (const solution of match({ load_impedance_ohm: given, frequency_hz, line, topologies: [topology] }).solutions) {
+          const width = solution.bandwidth_hz.at_10_db;
+          if (width === null || width > 0.8 * frequency_hz) continue;
+          for (const [name, limit] of [['at_10_db', Math.sqrt(0.1)], ['at_20_db', 0.1]] as const) {
+            const expected = edgeByCascade(solution, given, 1, limit) - edgeByCascade(solution, given, -1, limit);
+            expect(Math.abs(solution.bandwidth_hz[name]! / expected - 1), solution.description).toBeLessThan(1e-9);
+          }
+        }
+      }),
+      6,
+    );
+  });
+
   it('is nested, and between its edges the return loss stays at the limit or above', () => {
     const parts = fc.record({ kind: fc.constantFrom('series_rlc', 'parallel_rlc'), resistance_ohm: decades(0.5, 2.7), inductance_h: decades(-9, -7), capacitance_f: decades(-12.5, -10.5) });
     run(

@@ -1,5 +1,5 @@
 /** Newton's method for one complex equation in two real unknowns. */
-import Complex from 'complex.js';
+import type Complex from 'complex.js';
 
 export interface AtPoint {
   readonly value: Complex;

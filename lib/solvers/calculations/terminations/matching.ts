@@ -1,12 +1,12 @@
 import { z } from 'zod';
 import { defineCalculation, mergeMethods, type Method, type MethodUse, type Warning } from '../../calculation';
 import { element } from '../../elements/element';
+import { MatchBands } from '../../elements/match-bands';
 import { SourceAndLoad } from '../../elements/terminated-chain';
 import { ImpossibleInput, type InputProblem } from '../../errors';
 import { line, lineMethods } from '../../lines/line';
-import { inHertz } from '../../lines/line-warnings';
 import { telegrapherTwoPort } from '../../methods/line-two-port';
-import { firstEdges, matchBandwidth, OutwardSweep } from '../../methods/match-bandwidth';
+import { matchBandwidth } from '../../methods/match-bandwidth';
 import { doubleStubMatching, matchByDoubleStub } from '../../methods/match-double-stub';
 import { lSectionMatching, matchByLSection } from '../../methods/match-l-section';
 import { matchByQuarterWave, quarterWaveMatching } from '../../methods/match-quarter-wave';
@@ -101,8 +101,6 @@ const methodOf: Readonly<Record<Topology, Method>> = {
 
 /** Above this a network is no match, whatever its formulas say: numbers of 16 digits hold a quality factor of some millions. */
 const matched = 1e-9;
-const limits = [{ name: 'at_20_db', magnitude: 0.1, db: 20 }, { name: 'at_10_db', magnitude: Math.sqrt(0.1), db: 10 }] as const;
-const timesDesign = 10;
 
 export const matching = defineCalculation({
   id: 'matching',
@@ -224,7 +222,7 @@ function answerOf(topology: Topology, design: MatchingProblem, spacingM: number 
 /** Each network is judged by its own circuit before it counts as a solution. */
 function collect(given: Input, circuit: SourceAndLoad, design: MatchingProblem, topologies: readonly Topology[], band: Float64Array | undefined) {
   const at = Float64Array.of(given.frequency_hz);
-  const bands = new Bands(given, circuit, design);
+  const bands = new MatchBands(circuit, given.frequency_hz, tablesOf(given), design.line?.phaseRadPerM ?? 0);
   const columns = new ResultColumns();
   const warnings: Warning[] = [];
   const solutions: Solution[] = [];
@@ -243,7 +241,7 @@ function collect(given: Input, circuit: SourceAndLoad, design: MatchingProblem, 
         continue;
       }
       const pointer = `/solutions/${solutions.length}`;
-      const { bandwidth, warnings: open } = bands.of(match, pointer);
+      const { bandwidth, warnings: open } = bands.of(match.elements, pointer);
       warnings.push(...open);
       solutions.push({
         topology,
@@ -268,43 +266,9 @@ function responseOf(match: Match, circuit: SourceAndLoad, band: Float64Array, co
   };
 }
 
-/** Looks for the edges of every solution along the same two sweeps, so that the line's model over them is made once. */
-class Bands {
-  private readonly down: OutwardSweep;
-  private readonly up: OutwardSweep;
-
-  constructor(
-    private readonly given: Input,
-    private readonly circuit: SourceAndLoad,
-    private readonly design: MatchingProblem,
-  ) {
-    const tables = [given.load_impedance_ohm, given.line].flatMap((each) => (typeof each === 'object' && 'frequency_hz' in each ? [each.frequency_hz as number[]] : []));
-    const low = Math.max(0, ...tables.map((each) => each[0]));
-    const high = Math.min(timesDesign * given.frequency_hz, ...tables.map((each) => each[each.length - 1]));
-    this.down = new OutwardSweep(given.frequency_hz, low);
-    this.up = new OutwardSweep(given.frequency_hz, high);
-  }
-
-  of({ elements }: Match, pointer: string): { bandwidth: Solution['bandwidth_hz']; warnings: Warning[] } {
-    const magnitudeAt = (frequencies: Float64Array) => this.circuit.response(elements, frequencies).magnitude;
-    const lineLength = elements.reduce((sum, each) => sum + ('length_m' in each ? each.length_m : 0), 0);
-    const wavelengths = ((this.design.line?.phaseRadPerM ?? 0) * lineLength) / (2 * Math.PI);
-    const magnitudes = limits.map((each) => each.magnitude);
-    const [below, above] = [this.down, this.up].map((sweep) => firstEdges(magnitudeAt, this.given.frequency_hz, sweep, wavelengths, magnitudes));
-    const bandwidth = { at_10_db: null as number | null, at_20_db: null as number | null };
-    const warnings: Warning[] = [];
-    limits.forEach(({ name, db }, index) => {
-      const value = above.atHz[index] - below.atHz[index];
-      if (Number.isFinite(value)) bandwidth[name] = value;
-      else warnings.push({ code: 'no_band_edge', pointer: `${pointer}/bandwidth_hz/${name}`, detail: noEdge(db, below.atHz[index] === Infinity ? below.reachedHz : null, above.atHz[index] === Infinity ? above.reachedHz : null) });
-    });
-    return { bandwidth, warnings };
-  }
-}
-
-function noEdge(db: number, downToHz: number | null, upToHz: number | null): string {
-  const where = [...(downToHz === null ? [] : [`down to ${downToHz === 0 ? '0 Hz' : inHertz(downToHz)}`]), ...(upToHz === null ? [] : [`up to ${inHertz(upToHz)}`])];
-  return `the return loss stays at ${db} dB or more ${where.join(' and ')}, which is as far as was looked, so there is no finite width`;
+/** The frequencies of load and line where they are tables, which end. */
+function tablesOf(given: Input): (readonly number[])[] {
+  return [given.load_impedance_ohm, given.line].flatMap((each) => (typeof each === 'object' && 'frequency_hz' in each && Array.isArray(each.frequency_hz) ? [each.frequency_hz as number[]] : []));
 }
 
 function assumedVelocity({ line: given }: Input, solutions: readonly Solution[]): Warning[] {

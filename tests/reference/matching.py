@@ -339,7 +339,7 @@ SOLVE = {
 
 def expected(given, with_width):
     case = Case(given)
-    answer = {}
+    answer = {"/load_impedance_ohm": mp.mpc(case.load(2 * mp.pi * case.frequency))}
     with mp.workdps(45):
         solutions = SOLVE[given["topologies"][0]](case)
         for number, (form, unknowns, elements) in enumerate(solutions):
@@ -350,6 +350,7 @@ def expected(given, with_width):
             if with_width:
                 for db in (10, 20):
                     answer[f"/solutions/{number}/bandwidth_hz/at_{db}_db"] = width(case, form, unknowns, db)
+    answer["/solution_count"] = mp.mpf(len(solutions))
     return answer, len(solutions)
 
 
@@ -422,6 +423,16 @@ def printed():
     yield from example("5.5", "quarter wave of a textbook", {"load_impedance_ohm": 10, "frequency_hz": 3e9, "topologies": ["quarter_wave"]}, {"/solutions/0/elements/0/line/characteristic_impedance_ohm": mp.mpf("22.36")}, "to its printed digits", lambda value: 0.005 / float(value))
 
 
+def beside_the_forbidden_region():
+    """A conductance just below and just above Y0/sin^2(beta s), at an eighth of a wavelength twice that of the line."""
+    for name, ohm, count in (("below", 25.001, 8), ("above", 24.999, 0)):
+        given = {"load_impedance_ohm": ohm, "frequency_hz": 299792458, "line": UNIT, "topologies": ["double_shunt_stub"]}
+        values = {"/solution_count": mp.mpf(count)}
+        if count == 0:
+            values["/impossible/0/topology"] = "double_shunt_stub"
+        yield check("terminations/matching", f"two stubs {name} the forbidden region", "G <= Y0/sin^2(beta s) (Pozar, Microwave Engineering, 4th ed., section 5.3, from memory)", given, values, 1e-12)
+
+
 def checks():
     yield from printed()
     for load, source in ((10, 50), (300, 75), (200, 50)):
@@ -430,6 +441,7 @@ def checks():
         for db in (10, 20):
             values[f"/solutions/0/bandwidth_hz/at_{db}_db"] = quarter_wave_width(load, source, db) * 3e9
         yield check("terminations/matching", f"quarter wave from {source} to {load} ohm", "Z = sqrt(Rs RL); closed form of the bandwidth (Pozar, Microwave Engineering, 4th ed., equation 5.33, from memory), to 30 digits", given, values, 1e-12)
+    yield from beside_the_forbidden_region()
     for name, given, count, with_width in problems():
         values, found = expected(given, with_width)
         assert found == count, (name, found, count)

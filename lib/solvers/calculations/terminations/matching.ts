@@ -76,6 +76,13 @@ const solution = z
 
 const output = z
   .strictObject({
+    solution_count: z.number().int().min(0).meta({ title: 'Number of solutions', description: 'How many networks were found.', examples: [4], 'x-figure': 1 }),
+    load_impedance_ohm: z
+      .strictObject({
+        re: z.number().meta({ title: 'Real part', description: 'Real part.', examples: [60] }),
+        im: z.number().meta({ title: 'Imaginary part', description: 'Imaginary part.', examples: [-80] }),
+      })
+      .meta({ title: 'Load at design', description: 'Impedance of the load at the design frequency.', examples: [{ re: 60, im: -80 }], 'x-unit': 'ohm', 'x-figure': 2 }),
     solutions: z.array(solution).max(40).meta({ title: 'Solutions', description: 'Every network found, in the order of the topologies.' }),
     impossible: z
       .array(
@@ -122,7 +129,7 @@ export const matching = defineCalculation({
     const { solutions, impossible, warnings } = collect(given, circuit, design, topologies, band);
     const models = given.line === undefined ? [] : [Float64Array.of(given.frequency_hz), ...(band ? [band] : [])].map((frequencies) => circuit.modelOf(given.line!, frequencies));
     return {
-      result: { solutions, impossible },
+      result: { solution_count: solutions.length, load_impedance_ohm: { re: load.re + 0, im: load.im + 0 }, solutions, impossible },
       methods: mergeMethods([...methodsFor(topologies, given), ...models.flatMap((each) => each.methods)]),
       warnings: distinct([...assumedVelocity(given, solutions), ...models.flatMap((each) => each.warnings), ...warnings]).slice(0, 100),
     };

@@ -4,6 +4,7 @@
  */
 import { findCalculation } from '../solvers/registry';
 import matching from '../../tests/reference/matching.json';
+import given from '../../tests/reference/given.json';
 import networks from '../../tests/reference/networks.json';
 import telegrapher from '../../tests/reference/telegrapher.json';
 
@@ -32,7 +33,7 @@ export interface CheckFile {
   readonly checks: readonly Check[];
 }
 
-export const checkFiles: readonly CheckFile[] = [telegrapher, networks, matching] as unknown as readonly CheckFile[];
+export const checkFiles: readonly CheckFile[] = [telegrapher, networks, matching, given] as unknown as readonly CheckFile[];
 
 /** A value as the engine computes it now. */
 export type ComputedValue = number | boolean | string | null | { readonly re: number; readonly im: number };

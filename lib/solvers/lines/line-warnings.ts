@@ -31,6 +31,12 @@ export function inHertz(frequencyHz: number): string {
   return `${Number((frequencyHz / 1000 ** step).toPrecision(6))} ${prefixes[step]}Hz`;
 }
 
+/** "0 Hz to 100 MHz", or the one frequency where both are the same. */
+export function hertzRange(lowestHz: number, highestHz: number): string {
+  const text = (frequencyHz: number) => (frequencyHz === 0 ? '0 Hz' : inHertz(frequencyHz));
+  return lowestHz === highestHz ? text(lowestHz) : `${text(lowestHz)} to ${text(highestHz)}`;
+}
+
 /** Beyond these radians the rounding of the phase alone, some 1e-15 of it, is more than the stated accuracy. */
 const mostTurn = 1000;
 

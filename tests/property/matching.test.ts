@@ -78,7 +78,7 @@ describe('every match', () => {
         }
         expect(new Set(solutions.map(({ topology, elements }) => topology + JSON.stringify(elements))).size).toBe(solutions.length);
       }),
-      80,
+      40,
     );
   });
 
@@ -89,6 +89,7 @@ describe('every match', () => {
           expect(Math.hypot(reflection.re, reflection.im), description).toBeLessThan(1e-12);
         }
       }),
+      60,
     );
   });
 });

@@ -7,7 +7,7 @@
  */
 import type { Method } from '../calculation';
 import { passedOn, slopeAlong, stub, stubLength, turned, withinHalfWave } from './immittance-along-line';
-import { endOf, followLoss, isLossless, isSame, lineElement, stageOf, stubElement, stubKinds, type FoundLengths, type Stage, type StubKind } from './match-stubs-of-line';
+import { endOf, followLoss, isLossless, isSame, lineElement, noLengths, stageOf, stubElement, stubKinds, type FoundLengths, type Stage, type StubKind } from './match-stubs-of-line';
 import { inWavelengths, withoutDust, type DesignLine, type Match, type MatchAnswer, type MatchingProblem } from './matching';
 
 export const doubleStubMatching: Method = {
@@ -54,7 +54,7 @@ export function matchByDoubleStub(problem: MatchingProblem, line: DesignLine, sp
     for (const [atSource, atLoad] of pairs) {
       const start = startOf(bare, spacing, x, atSource, atLoad);
       const lengths = followLoss(problem, line, 'admittance', equationFor(spacing, atSource, atLoad), start);
-      if (!lengths) reasons.add(rest < 0 ? forbidden(line, bare, sine) : `with the loss of the line no lengths follow from those without loss (${atSource} stub at the source, ${atLoad} stub at the load)`);
+      if (!lengths) reasons.add(rest < 0 ? forbidden(line, bare, sine) : noLengths(line, `${named(atSource)} at the source, ${named(atLoad)} at the load`));
       else if (!found.some((other) => isSame(other, { stubs: `${atSource} ${atLoad}`, lengths }))) {
         found.push({ stubs: `${atSource} ${atLoad}`, lengths });
         const elements = [...stubElement('admittance', atSource, line, lengths[0]), ...lineElement(line, spacing), ...stubElement('admittance', atLoad, line, lengths[1])];
@@ -80,8 +80,10 @@ const equationFor = (spacing: number, atSource: StubKind, atLoad: StubKind) => (
   return { value: turned(y, spacing, k).add(ofFirst).sub(wanted), first: slopeAlong(ofFirst, k), second: passedOn(y, spacing, k).mul(slopeAlong(ofSecond, k)) };
 };
 
+const named = (kind: StubKind) => (kind === 'open' ? 'open stub' : 'shorted stub');
+
 function describe(atSource: StubKind, atLoad: StubKind, [first, second]: readonly [number, number], spacing: number): string {
-  const words = (kind: StubKind, length: number) => (kind === 'open' && length === 0 ? 'no stub' : `${kind === 'open' ? 'open' : 'shorted'} stub of ${inWavelengths(length)}`);
+  const words = (kind: StubKind, length: number) => (kind === 'open' && length === 0 ? 'no stub' : `${named(kind)} of ${inWavelengths(length)}`);
   const text = `${words(atSource, first)}, ${inWavelengths(spacing)} of line, ${words(atLoad, second)} at the load`;
   return text[0].toUpperCase() + text.slice(1);
 }

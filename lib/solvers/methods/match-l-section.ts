@@ -47,7 +47,7 @@ export function matchByLSection({ load, source, frequencyHz }: MatchingProblem):
   const matches = new Map<string, Match>();
   for (const elements of [...seriesFirst, ...shuntFirst]) {
     if (isBuildable(elements)) matches.set(JSON.stringify(elements), { description: describe(elements), elements });
-    else reasons.push(`a section would need ${describe(elements).toLowerCase()}, which is beyond 1000 H or 1000 F`);
+    else reasons.push(`${describe(elements)}: a part is beyond 1000 H or 1000 F`);
   }
   return { matches: [...matches.values()], reasons };
 }

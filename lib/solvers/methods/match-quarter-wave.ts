@@ -45,7 +45,7 @@ export function matchByQuarterWave(problem: MatchingProblem): MatchAnswer {
   if (!line) return none('the load has a reactance, which a quarter wave alone cannot match; give line, a length of which makes the load real');
   const places = (['maximum', 'minimum'] as const).map((place) => {
     const distance = distanceToReal(problem, line, place);
-    if (distance === null) return `the impedance along the line does not become real at a voltage ${place}`;
+    if (distance === null) return isLossless(line) ? `at a voltage ${place} so sharp a match is beyond numbers of 16 digits` : `with the loss of the line its impedance does not become real near a voltage ${place}`;
     const at = turned(stageOf(problem, line, 'impedance', 1).load, distance, turnOf(line)).mul(complexOf(line.characteristicImpedance));
     return transformer(problem, velocityFactor, at.re, lineElement(line, distance), `at a voltage ${place}, ${inWavelengths(distance)} from the load`);
   });
@@ -82,13 +82,14 @@ const stepsOfLoss = 8;
 function distanceToReal(problem: MatchingProblem, line: DesignLine, place: 'maximum' | 'minimum'): number | null {
   const bare = stageOf(problem, line, 'impedance', 0).load;
   const wave = bare.sub(1).div(bare.add(1));
-  if (Math.hypot(wave.re, wave.im) < 1e-12) return null;
+  if (wave.re === 0 && wave.im === 0) return null;
   const start = withinHalfWave((Math.atan2(wave.im, wave.re) / 2 + (place === 'maximum' ? 0 : Math.PI / 2)) % Math.PI);
-  for (const from of [start, start + Math.PI]) {
+  // The shortest: loss may carry a place past the load, or leave one half a wave nearer.
+  for (const from of isLossless(line) ? [start] : [start - Math.PI, start, start + Math.PI]) {
     let distance = from;
     const shares = isLossless(line) ? [1] : Array.from({ length: stepsOfLoss }, (_, index) => (index + 1) / stepsOfLoss);
     for (const share of shares) distance = nearestReal(problem, line, share, distance);
-    if (distance >= 0) return isRealAt(problem, line, distance) ? distance : null;
+    if (distance >= 0 && isRealAt(problem, line, distance)) return distance;
   }
   return null;
 }

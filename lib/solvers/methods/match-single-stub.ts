@@ -10,7 +10,7 @@
 import Complex from 'complex.js';
 import type { Method } from '../calculation';
 import { slopeAlong, stub, stubLength, turned, withinHalfWave, type Immittance } from './immittance-along-line';
-import { endOf, followLoss, isLossless, isSame, lineElement, stageOf, stubElement, stubKinds, type FoundLengths, type Stage, type StubKind } from './match-stubs-of-line';
+import { endOf, followLoss, isLossless, isSame, lineElement, noLengths, stageOf, stubElement, stubKinds, type FoundLengths, type Stage, type StubKind } from './match-stubs-of-line';
 import { inWavelengths, withoutDust, type DesignLine, type Match, type MatchAnswer, type MatchingProblem } from './matching';
 
 export const singleStubMatching: Method = {
@@ -52,7 +52,7 @@ export function matchBySingleStub(problem: MatchingProblem, line: DesignLine, ki
     for (const each of stubKinds) {
       const end = endOf(kind, each);
       const lengths = followLoss(problem, line, kind, equationFor(kind, each), [distance, withinHalfWave(stubLength(end, missing))]);
-      if (!lengths) reasons.add(exist ? `with the loss of the line no lengths follow from those without loss (${each} stub)` : reason);
+      if (!lengths) reasons.add(exist ? noLengths(line, each === 'open' ? 'open stub' : 'shorted stub') : reason);
       else if (!found.some((other) => isSame(other, { stubs: each, lengths }))) {
         found.push({ stubs: each, lengths });
         matches.push({ description: describe(kind, each, lengths), elements: [...stubElement(kind, each, line, lengths[1]), ...lineElement(line, lengths[0])] });

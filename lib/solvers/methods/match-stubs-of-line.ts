@@ -46,29 +46,42 @@ const matched = 1e-9;
 /** Radians; longer ones would leave the branch that is followed. */
 const longestStep = 0.3;
 
+/** Without loss a length and half a wave more are the same; with loss they are not, and the shortest that is left is wanted. */
+const halfWavesBeside = [-Math.PI, 0, Math.PI];
+
 /**
- * From lengths (in radians) that solve the equation without loss to lengths that solve it with loss, none negative; null where there are
- * none. One that loss makes negative is sought half a wave further. `value + wanted + source` must be the sum of input and source.
+ * From lengths (in radians) that solve the equation without loss to the shortest, none negative, that solve it with loss; null where there
+ * are none. `value + wanted + source` of the equation must be the sum of input and source.
  */
 export function followLoss(problem: MatchingProblem, line: DesignLine, kind: Immittance, equation: Equation, start: readonly [number, number]): readonly [number, number] | null {
-  const shares = isLossless(line) ? [1] : Array.from({ length: stepsOfLoss }, (_, index) => (index + 1) / stepsOfLoss);
-  const stages = shares.map((share) => stageOf(problem, line, kind, share));
-  let from = start;
-  for (let turn = 0; turn < 3; turn++) {
-    const [first, second] = stages.reduce((lengths, stage) => solveTwoUnknowns(equation(stage), lengths, longestStep), from);
-    if (first > -noLength && second > -noLength) {
-      const lengths = [first < noLength ? 0 : first, second < noLength ? 0 : second] as const;
-      return isMatch(stages[stages.length - 1], equation, lengths) ? lengths : null;
+  if (isLossless(line)) return follow([stageOf(problem, line, kind, 1)], equation, start);
+  const stages = Array.from({ length: stepsOfLoss }, (_, index) => stageOf(problem, line, kind, (index + 1) / stepsOfLoss));
+  let shortest: readonly [number, number] | null = null;
+  for (const first of halfWavesBeside) {
+    for (const second of halfWavesBeside) {
+      const lengths = follow(stages, equation, [start[0] + first, start[1] + second]);
+      if (lengths && (!shortest || lengths[0] + lengths[1] < shortest[0] + shortest[1])) shortest = lengths;
     }
-    from = [from[0] + (first > -noLength ? 0 : Math.PI), from[1] + (second > -noLength ? 0 : Math.PI)];
   }
-  return null;
+  return shortest;
+}
+
+function follow(stages: readonly Stage[], equation: Equation, start: readonly [number, number]): readonly [number, number] | null {
+  const [first, second] = stages.reduce((lengths, stage) => solveTwoUnknowns(equation(stage), lengths, longestStep), start);
+  if (!(first > -noLength && second > -noLength)) return null;
+  const lengths = [first < noLength ? 0 : first, second < noLength ? 0 : second] as const;
+  return isMatch(stages[stages.length - 1], equation, lengths) ? lengths : null;
 }
 
 function isMatch(stage: Stage, equation: Equation, [first, second]: readonly [number, number]): boolean {
   const { value } = equation(stage)(first, second);
   const sum = value.add(stage.wanted).add(stage.source);
   return Math.hypot(value.re, value.im) <= matched * Math.hypot(sum.re, sum.im);
+}
+
+/** Why no lengths were found although there are some without loss. */
+export function noLengths(line: DesignLine, stubs: string): string {
+  return isLossless(line) ? `so sharp a match is beyond numbers of 16 digits (${stubs})` : `with the loss of the line no lengths follow from those without loss (${stubs})`;
 }
 
 /** Open and shorted, in this order everywhere. */

@@ -22,20 +22,21 @@ export const metadata: Metadata = {
   description: 'Every published check value beside what the running engine computes for it now, with the difference and what is allowed.',
 };
 
-const checksAPage = 40;
+const checksAPage = 30;
 
 export default async function VerificationPage({ searchParams }: { readonly searchParams: Promise<SearchParams> }) {
   const filters = readFilters(await searchParams);
   const record = await verificationRecord();
   const found = applyFilters(record.checks, filters);
   const narrowed = isNarrowed(filters);
+  const isFirst = !narrowed && filters.page === 1;
   return (
     <PublicFrame>
       <PageTitle title="Verification">
         Values that were published, or found to 30 digits by another route than the engine’s, and beside each what the running engine computes for it now. Nothing here is pasted: the tests of every release read the same data.
       </PageTitle>
-      <Summary record={record} />
-      {!narrowed && filters.page === 1 && (
+      <Summary record={record} inBrief={!isFirst} />
+      {isFirst && (
         <>
           <Reading />
           <Overview record={record} />

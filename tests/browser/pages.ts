@@ -9,7 +9,7 @@ export interface WalkedPage {
 
 export function allPages({ callId }: World): WalkedPage[] {
   return [
-    ...['/', '/sign-in', '/problems', '/problems/invalid-input', '/reference', '/methods', '/methods/telegrapher-propagation', '/methods/no-such-method', '/verification', '/verification?calculation=lines/secondary-constants', '/no-such-page'].map((path) => ({ path, signedIn: false })),
+    ...['/', '/sign-in', '/problems', '/problems/invalid-input', '/reference', '/methods', '/methods/telegrapher-propagation', '/methods/no-such-method', '/verification?calculation=lines/secondary-constants&q=telephone', '/no-such-page'].map((path) => ({ path, signedIn: false })),
     ...[...consolePages.map(({ path }) => path), `/console/calls/${callId}`, '/console/calls?status=5xx', '/console/usage?by=key&days=7'].map((path) => ({ path, signedIn: true })),
   ];
 }

@@ -15,7 +15,8 @@ interface CheckListProps {
 }
 
 /** By calculation, then by source, so that a source which many checks share is said once. */
-export function CheckList({ checks, standings }: CheckListProps) {
+export async function CheckList({ checks, standings }: CheckListProps) {
+  const fragments = new Map(await Promise.all(checks.map(async (recorded) => [recorded, await encodeInput(recorded.check.input)] as const)));
   return runsOf(checks, ({ check }) => check.calculation).map((those) => {
     const path = those[0].check.calculation;
     const [group, id] = path.split('/');
@@ -38,7 +39,7 @@ export function CheckList({ checks, standings }: CheckListProps) {
         </div>
         <ColumnNames />
         {runsOf(those, ({ check }) => check.source).map((sameSource, index) => (
-          <SourceGroup key={index} checks={sameSource} />
+          <SourceGroup key={index} checks={sameSource} fragments={fragments} />
         ))}
       </section>
     );
@@ -58,26 +59,26 @@ function ColumnNames() {
   );
 }
 
-function SourceGroup({ checks }: { readonly checks: readonly RecordedCheck[] }) {
+function SourceGroup({ checks, fragments }: { readonly checks: readonly RecordedCheck[]; readonly fragments: ReadonlyMap<RecordedCheck, string> }) {
   const { source } = checks[0].check;
   return (
     <div className="border-b border-rule pt-3 pb-4 last:border-b-0">
       <p className="max-w-[92ch] text-fine wrap-anywhere text-ash">{source.charAt(0).toUpperCase() + source.slice(1)}</p>
       {checks.map((recorded, index) => (
-        <OneCheck key={index} recorded={recorded} />
+        <OneCheck key={index} recorded={recorded} fragment={fragments.get(recorded) ?? ''} />
       ))}
     </div>
   );
 }
 
-async function OneCheck({ recorded }: { readonly recorded: RecordedCheck }) {
+function OneCheck({ recorded, fragment }: { readonly recorded: RecordedCheck; readonly fragment: string }) {
   const { check, comparisons, failure } = recorded;
   return (
     <article className="mt-3">
       <div className="flex flex-wrap items-baseline justify-between gap-x-6">
         <h3 className="text-small font-[550] wrap-anywhere">{check.name}</h3>
-        {/* No prefetch: fifty of them stand on a page. */}
-        <Link href={`/console/bench/${check.calculation}#${await encodeInput(check.input)}`} prefetch={false} className="text-fine text-ash hover:text-copper hover:underline">
+        {/* No prefetch: dozens of them stand on a page. */}
+        <Link href={`/console/bench/${check.calculation}#${fragment}`} prefetch={false} className="text-fine text-ash hover:text-copper hover:underline">
           Open on the Bench<span className="sr-only">: {check.name}</span>
         </Link>
       </div>

@@ -7,8 +7,8 @@ import { percent } from './digits';
 import { verificationHref } from './filters';
 import { Spread } from './spread';
 
-/** How the whole record stands, whatever is filtered below. */
-export function Summary({ record }: { readonly record: VerificationRecord }) {
+/** How the whole record stands, whatever is filtered below; in brief where a small screen is wanted for that. */
+export function Summary({ record, inBrief }: { readonly record: VerificationRecord; readonly inBrief: boolean }) {
   const { checks, values, failingChecks, failingValues, worst } = record.whole;
   const holds = failingValues === 0;
   return (
@@ -26,14 +26,14 @@ export function Summary({ record }: { readonly record: VerificationRecord }) {
         <Figures className="mt-3">
           <Figure label="Checks" value={formatCount(checks)} />
           <Figure label="Values" value={formatCount(values)} />
-          {worst && <Figure label="Nearest to its limit" value={percent(worst.share)} unit="of what is allowed" />}
+          {holds && worst && <Figure label="Nearest to its limit" value={percent(worst.share)} unit="of what is allowed" />}
           <Figure label="Engine" value={record.engine} />
         </Figures>
         <p className="mt-3 text-fine text-ash">
           Computed by the process that runs since <LocalTime iso={record.startedAt} />.
         </p>
       </div>
-      <div className="w-full sm:w-[340px]">
+      <div className={`w-full sm:block sm:w-[340px] ${inBrief ? 'hidden' : ''}`}>
         <Spread checks={record.checks} />
       </div>
     </section>

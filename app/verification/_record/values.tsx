@@ -1,3 +1,4 @@
+import type { ReactNode } from 'react';
 import type { Check, Comparison } from '@/lib/verification/checks';
 import { brief, computedLines, publishedLines, type Line } from './digits';
 
@@ -73,35 +74,24 @@ function ValueRow({ comparison, limit, refused }: ValueRowProps) {
   return (
     <tr className={holds ? undefined : 'fails'}>
       <th scope="row">
-        {breakable(pointer.slice(1))}
+        {pointer.slice(1)}
         {reason && <small>{reason}</small>}
       </th>
       <td>
         {limit && <i>{limit}</i>}
-        <Lines lines={publishedLines(published)} />
+        {lines(publishedLines(published))}
       </td>
-      <td>{refused ? <i>no answer</i> : <Lines lines={computedLines(published, computed)} />}</td>
+      <td>{refused ? <i>no answer</i> : lines(computedLines(published, computed))}</td>
       <td>
-        {difference === null ? (holds ? 'the same' : 'not the same') : brief(difference)}
-        {!holds && <b> does not hold</b>}
+        {difference !== null ? brief(difference) : holds ? 'the same' : !refused && <b>not the same</b>}
+        {difference !== null && !holds && <b> does not hold</b>}
       </td>
       <td>{brief(tolerance)}</td>
     </tr>
   );
 }
 
-function Lines({ lines }: { readonly lines: readonly Line[] }) {
-  return lines.map(({ before, agreeing, following, after }, index) => (
-    <span key={index} className="digits">
-      {before}
-      {agreeing}
-      {following && <span>{following}</span>}
-      {after}
-    </span>
-  ));
-}
-
-/** A long name of a field may break after its underscores and slashes. */
-function breakable(name: string) {
-  return name.split(/(?<=[_/])/).flatMap((part, index) => (index === 0 ? [part] : [<wbr key={index} />, part]));
+/** Plain text wherever it can be: a page has thousands of these. */
+function lines(of: readonly Line[]): ReactNode[] {
+  return of.flatMap(({ before, agreeing, following, after }, index) => [(index > 0 ? '\n' : '') + before + agreeing, following && <span key={index}>{following}</span>, after]);
 }

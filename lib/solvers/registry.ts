@@ -1,12 +1,13 @@
 /** Every calculation of the service. This list is the only place that knows them all. */
 import type { Calculation, Method } from './calculation';
+import { fromSecondary } from './calculations/lines/from-secondary';
 import { secondaryConstants } from './calculations/lines/secondary-constants';
 import { cascade } from './calculations/networks/cascade';
 import { convert } from './calculations/networks/convert';
 import { inputImpedance } from './calculations/terminations/input-impedance';
 import { matching } from './calculations/terminations/matching';
 
-export const calculations: readonly Calculation[] = [secondaryConstants, inputImpedance, matching, cascade, convert];
+export const calculations: readonly Calculation[] = [secondaryConstants, fromSecondary, inputImpedance, matching, cascade, convert];
 
 export function findCalculation(group: string, id: string): Calculation | undefined {
   return calculations.find((calculation) => calculation.group === group && calculation.id === id);

@@ -6,7 +6,7 @@ constants at neighbouring frequencies, cubics between rows by de Casteljau's con
 
 import mpmath as mp
 
-from support import abcd_of_line, check, exact, short_length, write, zc_of
+from support import abcd_of_line, check, complex_of, exact, short_length, write, zc_of
 
 EXPONENTIAL = "matrix exponential of the telegrapher equations with the constants of the row, computed to 30 digits"
 
@@ -212,10 +212,72 @@ def data_sheet_checks():
         yield check("terminations/input-impedance", f"data sheet cable of 7.5 m into 75 ohm at {frequency:g} Hz", "matrix exponential of the telegrapher equations, computed to 30 digits", {"line": line, "length_m": 7.5, "termination": 75, "frequency_hz": frequency}, {"/input_impedance_ohm": zin, "/reflection_at_reference": (zin - 50) / (zin + 50)}, 1e-12)
 
 
+def polar(value):
+    if isinstance(value, dict) and "magnitude" in value:
+        return exact(value["magnitude"]) * mp.expj(exact(value["angle_deg"]) * mp.pi / 180)
+    return complex_of(value)
+
+
+def back(gamma, zc, frequency):
+    """By magnitudes and angles: |Z| = |gamma| |Zc|, the angles add; |Y| = |gamma| / |Zc|, they subtract."""
+    g, z, omega = polar(gamma), polar(zc), 2 * mp.pi * exact(frequency)
+    (gs, ga), (zs, za) = mp.polar(g), mp.polar(z)
+    series, shunt = mp.rect(gs * zs, ga + za), mp.rect(gs / zs, ga - za)
+    expected = {"/resistance_ohm_per_m": mp.re(series), "/conductance_s_per_m": mp.re(shunt)}
+    if omega == 0:
+        return {**expected, "/inductance_h_per_m": None, "/capacitance_f_per_m": None}
+    return {**expected, "/inductance_h_per_m": mp.im(series) / omega, "/capacitance_f_per_m": mp.im(shunt) / omega}
+
+
+def double(value):
+    return {"re": float(mp.re(value)), "im": float(mp.im(value))}
+
+
+MODEL = "R, L, G, C of the model, of which the input is gamma and Zc by matrix exponential, rounded to 16 digits"
+
+
+def from_secondary_checks():
+    name = "lines/from-secondary"
+    source = "gamma Zc and gamma / Zc by magnitude and angle, computed to 30 digits"
+    cases = {
+        "cable": ({"re": 0.0018, "im": 3.14}, {"re": 50, "im": -0.009}, 1e8),
+        "line without loss": ({"re": 0, "im": 4.2}, 75, 1.5e8),
+        "very good line": ({"re": 1e-9, "im": 41.9}, {"re": 50, "im": -1e-9}, 2e9),
+        "line on a chip": ({"re": 5590.2, "im": 5615.5}, {"re": 44.7, "im": -44.5}, 5e9),
+        "impedance by magnitude and angle": ({"magnitude": 0.0123, "angle_deg": 88.5}, {"magnitude": 118, "angle_deg": -12}, 1e5),
+        "angles of 45 degrees": ({"magnitude": 0.02, "angle_deg": 45}, {"magnitude": 900, "angle_deg": -45}, 800),
+        "direct current": (2e-5, 2500, 0),
+        "one hertz": ({"re": 1.1e-6, "im": 1.2e-6}, {"re": 4100, "im": -3900}, 1),
+        "very small impedance": ({"re": 0.4, "im": 300}, {"re": 1e-9, "im": -2e-12}, 1e9),
+        "very large impedance": ({"re": 0.4, "im": 300}, {"re": 9e11, "im": -2e10}, 1e9),
+        "no conductance left": ({"re": 0.3, "im": 0.4}, {"re": 30, "im": -40}, 1e6),
+        "not passive": ({"re": 0.001, "im": 2}, {"re": 50, "im": 3}, 1e8),
+    }
+    for title, (gamma, zc, frequency) in cases.items():
+        yield check(name, title, source, {"frequency_hz": frequency, "propagation_constant_per_m": gamma, "characteristic_impedance_ohm": zc}, back(gamma, zc, frequency), 1e-12)
+    for title, at in PAIRS.items():
+        for frequency in (1e3, 138e3, 1.104e6, 3e7):
+            constants = at(exact(frequency))
+            line, omega = constant(*constants), 2 * mp.pi * exact(frequency)
+            gamma, zc = double(gamma_of(line, omega)), double(zc_of(line, omega))
+            # A part that is a k-th of the whole is known to k units of rounding of the input.
+            gain = max(abs(omega * constants[1] / constants[0]), abs(omega * constants[3] / constants[2]), 1)
+            given = {"frequency_hz": frequency, "propagation_constant_per_m": {part: [gamma[part]] for part in gamma}, "characteristic_impedance_ohm": {part: [zc[part]] for part in zc}}
+            expected = dict(zip(("/resistance_ohm_per_m", "/inductance_h_per_m", "/conductance_s_per_m", "/capacitance_f_per_m"), constants))
+            exceptions = {}
+            reason = "gamma and Zc of 16 digits know this part of the whole, some 1/%d of it, no better" % int(gain)
+            for pointer, ratio in (("/resistance_ohm_per_m", omega * constants[1] / constants[0]), ("/conductance_s_per_m", omega * constants[3] / constants[2])):
+                if ratio > 1000:
+                    exceptions[pointer] = {"tolerance": float(mp.nstr(ratio * mp.mpf("1e-15"), 1)), "reason": reason}
+            more = {"exceptions": exceptions} if exceptions else {}
+            yield check(name, f"telephone pair of {title} at {frequency / 1e3:g} kHz", PAIR_SOURCE + "; " + MODEL, given, expected, 1e-12, **more)
+
+
 def checks():
     yield from table_checks()
     yield from pair_checks()
     yield from data_sheet_checks()
+    yield from from_secondary_checks()
 
 
 if __name__ == "__main__":

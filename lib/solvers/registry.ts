@@ -6,8 +6,9 @@ import { cascade } from './calculations/networks/cascade';
 import { convert } from './calculations/networks/convert';
 import { inputImpedance } from './calculations/terminations/input-impedance';
 import { matching } from './calculations/terminations/matching';
+import { reflection } from './calculations/terminations/reflection';
 
-export const calculations: readonly Calculation[] = [secondaryConstants, fromSecondary, inputImpedance, matching, cascade, convert];
+export const calculations: readonly Calculation[] = [secondaryConstants, fromSecondary, inputImpedance, reflection, matching, cascade, convert];
 
 export function findCalculation(group: string, id: string): Calculation | undefined {
   return calculations.find((calculation) => calculation.group === group && calculation.id === id);

@@ -6,6 +6,7 @@ import { findCalculation } from '../solvers/registry';
 import matching from '../../tests/reference/matching.json';
 import given from '../../tests/reference/given.json';
 import networks from '../../tests/reference/networks.json';
+import reflection from '../../tests/reference/reflection.json';
 import telegrapher from '../../tests/reference/telegrapher.json';
 
 /** A number as its digits; a complex one in parts; null where there is none. */
@@ -33,7 +34,7 @@ export interface CheckFile {
   readonly checks: readonly Check[];
 }
 
-export const checkFiles: readonly CheckFile[] = [telegrapher, networks, matching, given] as unknown as readonly CheckFile[];
+export const checkFiles: readonly CheckFile[] = [telegrapher, networks, reflection, matching, given] as unknown as readonly CheckFile[];
 
 /** A value as the engine computes it now. */
 export type ComputedValue = number | boolean | string | null | { readonly re: number; readonly im: number };

@@ -56,8 +56,11 @@ export function reflection<T extends Phasor<T>>(
   return { gamma, magnitude: magnitudes(space, gamma), absorbed };
 }
 
+/** |Gamma| and 1 - |Gamma|^2, each with its own digits. */
+export type ReflectionSizes = Pick<Reflection<unknown>, 'magnitude' | 'absorbed'>;
+
 /** (1 + |Gamma|) / (1 - |Gamma|); NaN where |Gamma| is 1 or more. */
-export function standingWaveRatio({ magnitude, absorbed }: Reflection<unknown>): Float64Array {
+export function standingWaveRatio({ magnitude, absorbed }: ReflectionSizes): Float64Array {
   return magnitude.map((each, index) => (absorbed[index] > 0 ? ((1 + each) * (1 + each)) / absorbed[index] : NaN));
 }
 
@@ -65,9 +68,17 @@ export function standingWaveRatio({ magnitude, absorbed }: Reflection<unknown>):
 const nearlyWhole = 0.7;
 
 /** -20 log10 |Gamma|; infinite where Gamma is 0. */
-export function returnLossDb({ magnitude, absorbed }: Reflection<unknown>): Float64Array {
+export function returnLossDb({ magnitude, absorbed }: ReflectionSizes): Float64Array {
   return magnitude.map((each, index) => {
     const db = each < nearlyWhole ? -decibelsPerNeper * Math.log(each) : -0.5 * decibelsPerNeper * Math.log1p(-absorbed[index]);
+    return db === 0 ? 0 : db;
+  });
+}
+
+/** -10 log10(1 - |Gamma|^2); NaN where |Gamma| is more than 1, infinite where it is 1. */
+export function mismatchLossDb({ magnitude, absorbed }: ReflectionSizes): Float64Array {
+  return magnitude.map((each, index) => {
+    const db = -0.5 * decibelsPerNeper * (each < nearlyWhole ? Math.log1p(-each * each) : Math.log(absorbed[index]));
     return db === 0 ? 0 : db;
   });
 }

@@ -46,7 +46,7 @@ export function complexParts(value: ComplexNumber): ComplexParts {
 }
 
 /** Reduced to within 45 degrees of an axis first, so that 90 degrees has no real part at all. */
-function cosineAndSineOfDegrees(angle: number): { cosine: number; sine: number } {
+export function cosineAndSineOfDegrees(angle: number): { cosine: number; sine: number } {
   const quarters = Math.round(angle / 90);
   const rest = (angle - 90 * quarters) * (Math.PI / 180);
   const cosine = Math.cos(rest);

@@ -269,7 +269,7 @@ function responseOf(match: Match, circuit: SourceAndLoad, band: Float64Array, co
   return {
     frequency_hz: finiteColumn(band),
     reflection: columns.complex(reflected, { pointer: `${pointer}/response/reflection`, code: 'no_value', reason: 'there is no forward wave to compare with' }),
-    return_loss_db: columns.real(returnLossDb({ gamma: undefined, magnitude, absorbed }), { pointer: `${pointer}/response/return_loss_db`, code: 'no_reflection', reason: 'nothing is reflected, so the return loss is infinite' }),
+    return_loss_db: columns.real(returnLossDb({ magnitude, absorbed }), { pointer: `${pointer}/response/return_loss_db`, code: 'no_reflection', reason: 'nothing is reflected, so the return loss is infinite' }),
   };
 }
 

@@ -7,6 +7,7 @@ import matching from '../../tests/reference/matching.json';
 import given from '../../tests/reference/given.json';
 import networks from '../../tests/reference/networks.json';
 import reflection from '../../tests/reference/reflection.json';
+import round from '../../tests/reference/round.json';
 import telegrapher from '../../tests/reference/telegrapher.json';
 
 /** A number as its digits; a complex one in parts; null where there is none. */
@@ -34,7 +35,7 @@ export interface CheckFile {
   readonly checks: readonly Check[];
 }
 
-export const checkFiles: readonly CheckFile[] = [telegrapher, networks, reflection, matching, given] as unknown as readonly CheckFile[];
+export const checkFiles: readonly CheckFile[] = [telegrapher, networks, reflection, matching, given, round] as unknown as readonly CheckFile[];
 
 /** A value as the engine computes it now. */
 export type ComputedValue = number | boolean | string | null | { readonly re: number; readonly im: number };

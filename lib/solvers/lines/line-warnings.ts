@@ -52,3 +52,10 @@ export function turnWarnings(turns: Float64Array, pointer: string): Warning[] {
     },
   ];
 }
+
+/** Where a line carries more than its transverse wave. */
+export function higherModeWarnings(omega: Float64Array, singleModeLimitHz: number): Warning[] {
+  const highest = omega.reduce((most, each) => Math.max(most, each), 0) / (2 * Math.PI);
+  if (highest <= singleModeLimitHz) return [];
+  return [{ code: 'higher_modes', pointer: '', detail: `above ${inHertz(singleModeLimitHz)} a higher mode propagates beside the one computed here; frequency_hz goes up to ${inHertz(highest)}` }];
+}

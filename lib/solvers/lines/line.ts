@@ -2,16 +2,17 @@
 import { z } from 'zod';
 import { mergeMethods, type Method } from '../calculation';
 import { ImpossibleInput } from '../errors';
+import { coaxial } from './coaxial';
 import { datasheet } from './datasheet';
 import type { LineKind, LineModel } from './line-constants';
 import { lossless } from './lossless';
 import { rlgc } from './rlgc';
 import { rlgcTable } from './rlgc-table';
 
-const kinds = [rlgc, rlgcTable, lossless, datasheet] as const;
+const kinds = [rlgc, rlgcTable, lossless, datasheet, coaxial] as const;
 
 export const line = z
-  .discriminatedUnion('kind', [rlgc.schema, rlgcTable.schema, lossless.schema, datasheet.schema])
+  .discriminatedUnion('kind', [rlgc.schema, rlgcTable.schema, lossless.schema, datasheet.schema, coaxial.schema])
   .meta({ id: 'Line', title: 'Line', description: 'A uniform two-conductor line.' });
 
 export type Line = z.output<typeof line>;

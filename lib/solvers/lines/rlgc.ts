@@ -1,7 +1,21 @@
 /** A line given by its primary constants, taken as the same at every frequency. */
 import { z } from 'zod';
+import type { Method } from '../calculation';
 import { constantConstants, defineLineKind } from './line-constants';
 import { constantOverDecadeWarnings } from './line-warnings';
+
+export const givenConstants: Method = {
+  id: 'given-constants',
+  title: 'Constants as they were given',
+  source: 'the request itself; L = Z0/v and C = 1/(Z0 v) for a line without loss (Pozar, Microwave Engineering, 4th ed., equations 2.12 to 2.14, numbers from memory)',
+  formulas: [String.raw`L = \frac{Z_0}{v}, \qquad C = \frac{1}{Z_0 v}`],
+  symbols: [
+    { symbol: 'Z_0', meaning: 'characteristic impedance', unit: 'ohm' },
+    { symbol: 'v', meaning: 'velocity', unit: 'm/s' },
+  ],
+  range: 'as far as what was given holds',
+  accuracy: 'exact; 1e-12 relative in float64',
+};
 
 export const rlgc = defineLineKind({
   schema: z

@@ -9,7 +9,7 @@ const namedConductor = z.enum(conductorNames).meta({ id: 'NamedConductor', title
 
 const conductorByValue = z
   .strictObject({
-    resistivity_ohm_m: z.number().min(0).max(1e3).meta({ title: 'Resistivity', description: 'Resistivity at 20 degC; 0 is a perfect conductor.', examples: [1.724e-8], 'x-unit': 'ohm m' }),
+    resistivity_ohm_m: z.number().min(0).max(1e3).meta({ title: 'Resistivity', description: 'Resistivity at 20 degC; less than 1e-18 is taken as a perfect conductor.', examples: [1.724e-8], 'x-unit': 'ohm m' }),
     relative_permeability: z.number().min(1e-3).max(1e6).default(1).meta({ title: 'Relative permeability', description: 'Of the conductor, taken as constant.', examples: [1] }),
     temperature_coefficient_per_k: z.number().min(-0.02).max(0.02).default(0).meta({ title: 'Temperature coefficient', description: 'Of the resistivity, linear, referred to 20 degC.', examples: [0.00393], 'x-unit': '1/K' }),
   })
@@ -20,6 +20,9 @@ export const conductor = z.union([namedConductor, conductorByValue]).meta({ id: 
 export type Conductor = z.output<typeof conductor>;
 
 export const temperature = z.number().min(-273.15).max(2000).default(referenceTemperatureC).meta({ title: 'Temperature', description: 'Of the conductors.', examples: [20], 'x-unit': 'degC' });
+
+/** A hundred-millionth of what any metal has in the cold: less is taken as none. */
+const perfectBelowOhmM = 1e-18;
 
 export interface ConductorProperties {
   readonly resistivityOhmM: number;
@@ -35,7 +38,8 @@ export function conductorAt(value: Conductor, temperatureC: number): ConductorPr
     typeof value === 'string'
       ? conductors.find(({ name }) => name === value)!
       : { resistivityOhmM: value.resistivity_ohm_m, relativePermeability: value.relative_permeability, temperatureCoefficientPerK: value.temperature_coefficient_per_k };
-  return { resistivityOhmM: resistivityOhmM * (1 + temperatureCoefficientPerK * (temperatureC - referenceTemperatureC)), relativePermeability };
+  const atTemperature = resistivityOhmM * (1 + temperatureCoefficientPerK * (temperatureC - referenceTemperatureC));
+  return { resistivityOhmM: Math.abs(atTemperature) < perfectBelowOhmM ? 0 : atTemperature, relativePermeability };
 }
 
 /** Where the linear law has run below zero, which no temperature of a metal does. `pointer` is that of temperature_c. */

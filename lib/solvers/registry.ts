@@ -1,5 +1,6 @@
 /** Every calculation of the service. This list is the only place that knows them all. */
 import type { Calculation, Method } from './calculation';
+import { electricalLength } from './calculations/lines/electrical-length';
 import { fromSecondary } from './calculations/lines/from-secondary';
 import { primaryConstants } from './calculations/lines/primary-constants';
 import { secondaryConstants } from './calculations/lines/secondary-constants';
@@ -9,7 +10,7 @@ import { inputImpedance } from './calculations/terminations/input-impedance';
 import { matching } from './calculations/terminations/matching';
 import { reflection } from './calculations/terminations/reflection';
 
-export const calculations: readonly Calculation[] = [primaryConstants, secondaryConstants, fromSecondary, inputImpedance, reflection, matching, cascade, convert];
+export const calculations: readonly Calculation[] = [primaryConstants, secondaryConstants, fromSecondary, inputImpedance, reflection, matching, cascade, convert, electricalLength];
 
 export function findCalculation(group: string, id: string): Calculation | undefined {
   return calculations.find((calculation) => calculation.group === group && calculation.id === id);

@@ -5,6 +5,7 @@
 import { findCalculation } from '../solvers/registry';
 import matching from '../../tests/reference/matching.json';
 import given from '../../tests/reference/given.json';
+import lumped from '../../tests/reference/lumped.json';
 import networks from '../../tests/reference/networks.json';
 import reflection from '../../tests/reference/reflection.json';
 import round from '../../tests/reference/round.json';
@@ -35,7 +36,7 @@ export interface CheckFile {
   readonly checks: readonly Check[];
 }
 
-export const checkFiles: readonly CheckFile[] = [telegrapher, networks, reflection, matching, given, round] as unknown as readonly CheckFile[];
+export const checkFiles: readonly CheckFile[] = [telegrapher, networks, reflection, matching, given, round, lumped] as unknown as readonly CheckFile[];
 
 /** A value as the engine computes it now. */
 export type ComputedValue = number | boolean | string | null | { readonly re: number; readonly im: number };

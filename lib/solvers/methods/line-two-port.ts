@@ -37,7 +37,10 @@ export interface LineTwoPort<T> {
   readonly even: T;
   readonly series: T;
   readonly shunt: T;
-  /** Their derivatives to omega, divided by exp(t). */
+  /** S alone, and K = (cosh t - S)/t^2 in the same scale: how far the line is from its series impedance and shunt admittance. */
+  readonly quotient: T;
+  readonly kernel: T;
+  /** Derivatives of even, series and shunt to omega, divided by exp(t). */
   readonly evenSlope: T;
   readonly seriesSlope: T;
   readonly shuntSlope: T;
@@ -92,6 +95,8 @@ export function lineTwoPort<T extends Phasor<T>>(space: Space<T>, constants: Lin
     even,
     series: Zl.mul(S),
     shunt: Yl.mul(S),
+    quotient: S,
+    kernel: K,
     evenSlope: halfSquareSlope.mul(S),
     seriesSlope: ZlSlope.mul(S).add(Zl.mul(halfSquareSlope).mul(K)),
     shuntSlope: YlSlope.mul(S).add(Yl.mul(halfSquareSlope).mul(K)),

@@ -123,8 +123,132 @@ def ratio_checks():
         yield check("lines/primary-constants", f"skin effect ratio at x = {x}", "Resistance ratio of round wires, Bureau of Standards Circular 74 (1924), table of skin effect, x being argument of its Kelvin functions (from memory, three decimals)", {"line": line, "frequency_hz": f}, {"/resistance_ohm_per_m": mp.mpf(ratio) * COPPER / (mp.pi * a * a)}, 5e-4)
 
 
+def arcosh(x):
+    return mp.log(x + mp.sqrt((x - 1) * (x + 1)))
+
+
+def two_wire_checks():
+    dielectric = {"relative_permittivity": 2.1, "loss_tangent": 1e-3}
+    for d, s in ((5e-4, 2e-3), (2e-3, 2.02e-3), (1e-3, 0.3)):
+        for f in (0, 1e3, 1e6, 1e9):
+            omega = 2 * mp.pi * exact(f)
+            r, l = wire(d, omega)
+            outside = MU0 / mp.pi * arcosh(exact(s) / exact(d))
+            c = EPS0 * MU0 * exact(2.1) / outside
+            line = {"kind": "two_wire", "conductor_diameter_m": d, "spacing_m": s, "conductor": "copper", "proximity": False, "dielectric": dielectric}
+            expected = {**four(2 * r, outside + 2 * l, omega * c * exact(1e-3), c), "/external_inductance_h_per_m": outside, "/single_mode_limit_hz": None}
+            yield check("lines/primary-constants", f"two wires of {d:g} m, {s:g} m apart, without crowding, at {f:g} Hz", BESSEL + "; L C = mu eps", {"line": line, "frequency_hz": f}, expected, 1e-12)
+            outside = MU0 / (2 * mp.pi) * arcosh(2 * exact(s) / exact(d))
+            c = EPS0 * MU0 / outside
+            line = {"kind": "wire_over_plane", "conductor_diameter_m": d, "height_m": s, "conductor": "copper"}
+            yield check("lines/primary-constants", f"wire of {d:g} m, {s:g} m over a plane, at {f:g} Hz", BESSEL + "; L C = mu eps", {"line": line, "frequency_hz": f}, {**four(r, outside + l, 0, c), "/external_inductance_h_per_m": outside}, 1e-12)
+
+
+def crowded(d, s, f):
+    """R and L of two wires by matching the fields at points of the surface of one; the other is its mirror image, reversed."""
+    a, s = exact(d) / 2, exact(s)
+    omega = 2 * mp.pi * exact(f)
+    m = diffusion(omega, COPPER, 1)
+    count = 14
+    rise = [m * mp.besseli(n, m * a, 1) / mp.besseli(n, m * a) for n in range(count + 1)]
+    size = 2 * count + 1
+    matrix, side = mp.zeros(size, size), mp.zeros(size, 1)
+
+    def row(at, theta, radial):
+        # Unknowns: b(1..count) outside, alpha(1..count) inside, and the mean of A on the surface.
+        point = a * mp.expj(theta)
+        other = s - point
+        outward = mp.expj(theta)
+        for n in range(1, count + 1):
+            if radial:
+                own = -n / a * mp.cos(n * theta)
+                mirrored = mp.re(n * a**n / other ** (n + 1) * outward)
+                matrix[at, count + n - 1] = -rise[n] * mp.cos(n * theta)
+            else:
+                own = mp.cos(n * theta)
+                mirrored = mp.re((a / other) ** n)
+                matrix[at, count + n - 1] = -mp.cos(n * theta)
+            matrix[at, n - 1] = own - mirrored
+        if radial:
+            side[at] = mp.re(outward / other)
+        else:
+            matrix[at, size - 1] = -1
+            side[at] = mp.log(a) - mp.log(abs(other))
+
+    for k in range(count + 1):
+        row(k, mp.pi * (2 * k + 1) / (2 * (count + 1)), False)
+    for k in range(count):
+        row(count + 1 + k, mp.pi * (2 * k + 1) / (2 * count + 1), True)
+    mean = mp.lu_solve(matrix, side)[size - 1]
+    r, l = wire(d, omega)
+    z = 2 * (r + J * omega * l) + J * omega * MU0 / mp.pi * mean
+    return z.real, z.imag / omega
+
+
+def proximity_checks():
+    source = "matching of the fields at points of the wires' surface, 29 unknowns; Carson, Philosophical Magazine 41 (1921) 607-633 treats the same problem (from memory)"
+    with mp.workdps(30):
+        for d, s in ((1e-3, 4e-3), (5e-4, 1.5e-3)):
+            for f in (50, 2e4, 1e5, 1e6, 3e7):
+                r, l = crowded(d, s, f)
+                line = {"kind": "two_wire", "conductor_diameter_m": d, "spacing_m": s, "conductor": "copper"}
+                # 14 harmonics leave (x - sqrt(x^2 - 1))^28.
+                tolerance = float((exact(s) / exact(d) - mp.sqrt((exact(s) / exact(d)) ** 2 - 1)) ** 26) + 1e-12
+                yield check("lines/primary-constants", f"two wires of {d:g} m, {s:g} m apart, with crowding, at {f:g} Hz", source, {"line": line, "frequency_hz": f}, {"/resistance_ohm_per_m": r, "/inductance_h_per_m": l}, tolerance)
+    for d, s in ((1e-3, 1.5e-3), (1e-3, 1.1e-3), (1e-3, 1e-2)):
+        x = exact(s) / exact(d)
+        f = 1e13
+        rs = mp.sqrt(mp.pi * exact(f) * MU0 * COPPER)
+        line = {"kind": "two_wire", "conductor_diameter_m": d, "spacing_m": s, "conductor": "copper"}
+        yield check("lines/primary-constants", f"two wires, {s:g} m apart, at the limit of a thin skin", "R = 2 Rs/(pi d) (s/d)/sqrt((s/d)^2 - 1), incremental inductance (Wheeler, Proc. IRE 30 (1942) 412-424, from memory); the skin is 4e-5 of the diameter", {"line": line, "frequency_hz": f}, {"/resistance_ohm_per_m": 2 * rs / (mp.pi * exact(d)) * x / mp.sqrt(x * x - 1)}, 5e-4)
+
+
+def plate_checks():
+    for w, s, t in ((0.02, 1e-3, 35e-6), (0.05, 2e-4, 1e-3)):
+        for f in (0, 1e5, 1e7, 1e9):
+            omega = 2 * mp.pi * exact(f)
+            r, l = sheet(w, t, omega)
+            c = EPS0 * exact(4.3) * exact(w) / exact(s)
+            line = {"kind": "parallel_plate", "width_m": w, "separation_m": s, "thickness_m": t, "conductor": "copper", "dielectric": {"relative_permittivity": 4.3, "loss_tangent": 0.02}}
+            expected = {**four(2 * r, MU0 * exact(s) / exact(w) + 2 * l, omega * c * exact(0.02), c), "/single_mode_limit_hz": LIGHT / (2 * exact(s) * mp.sqrt(exact(4.3)))}
+            yield check("lines/primary-constants", f"plates {w:g} m wide at {f:g} Hz", "Ramo, Whinnery and Van Duzer, Fields and Waves in Communication Electronics, 3rd ed., section 3.17 (from memory), to 30 digits", {"line": line, "frequency_hz": f}, expected, 1e-12)
+
+
+def twisted_checks():
+    for d, big, twists in ((5.1e-4, 9.5e-4, 60), (2.5e-4, 2.9e-4, 400)):
+        angle = mp.atan(mp.pi * exact(twists) * exact(big))
+        q = mp.mpf("0.25") + mp.mpf("0.0004") * mp.degrees(angle) ** 2
+        effective = 1 + q * (exact(2.26) - 1)
+        z = MU0 * LIGHT / (mp.pi * mp.sqrt(effective)) * arcosh(exact(big) / exact(d))
+        line = {"kind": "twisted_pair", "conductor_diameter_m": d, "insulation_diameter_m": big, "twists_per_m": twists, "conductor": "perfect", "dielectric": {"relative_permittivity": 2.26}}
+        source = "Lefferson, IEEE Trans. PHP-7 (1971) 148-154 (from memory), its formula to 30 digits"
+        yield check("lines/secondary-constants", f"twisted pair, {twists} twists in a metre", source, {"line": line, "frequency_hz": 1e6}, {"/characteristic_impedance_ohm": mp.mpc(z), "/phase_velocity_m_per_s": LIGHT / mp.sqrt(effective)}, 1e-12)
+
+
+def debye_checks():
+    """The wideband Debye integral 1/(ln 10 (m2 - m1)) times the distribution of single relaxations, by quadrature over their frequencies."""
+    er, tangent, f0 = mp.mpf("4.3"), mp.mpf("0.02"), mp.mpf(10) ** 9
+    # Relaxations evenly spread over ln w from w1 to w2: eps = einf + k int d(ln u)/(1 + j w/u).
+    spread = lambda w: mp.quad(lambda y: 1 / (1 + J * w / mp.e**y), mp.linspace(mp.log(mp.mpf(10) ** 4), mp.log(mp.mpf(10) ** 12), 17))
+    at0 = spread(2 * mp.pi * f0)
+    k = er * tangent / -at0.imag
+    infinite = er - k * at0.real
+    for f in (1e4, 1e6, 1e9, 2e10):
+        omega = 2 * mp.pi * exact(f)
+        eps = infinite + k * spread(omega)
+        logarithm = mp.log(exact(3e-3) / exact(1e-3))
+        c0 = 2 * mp.pi * EPS0 / logarithm
+        line = {"kind": "coaxial", "inner_diameter_m": 1e-3, "outer_diameter_m": 3e-3, "conductor": "perfect", "dielectric": {"relative_permittivity": 4.3, "loss_tangent": 0.02, "model": "wideband_debye", "reference_frequency_hz": 1e9}}
+        yield check("lines/primary-constants", f"wideband Debye dielectric at {f:g} Hz", "Djordjevic et al., IEEE Trans. EMC-43 (2001) 662-667: relaxations spread evenly over eight decades, integrated numerically", {"line": line, "frequency_hz": f}, {"/capacitance_f_per_m": c0 * eps.real, "/conductance_s_per_m": -omega * c0 * eps.imag, "/effective_permittivity": eps.real}, 1e-12)
+
+
 def checks():
     yield from coaxial_checks()
+    yield from two_wire_checks()
+    yield from proximity_checks()
+    yield from plate_checks()
+    yield from twisted_checks()
+    yield from debye_checks()
     yield from ratio_checks()
 
 

@@ -8,9 +8,11 @@ import { cascade } from './calculations/networks/cascade';
 import { convert } from './calculations/networks/convert';
 import { inputImpedance } from './calculations/terminations/input-impedance';
 import { matching } from './calculations/terminations/matching';
+import { powerBudget } from './calculations/terminations/power-budget';
 import { reflection } from './calculations/terminations/reflection';
+import { standingWave } from './calculations/terminations/standing-wave';
 
-export const calculations: readonly Calculation[] = [primaryConstants, secondaryConstants, fromSecondary, inputImpedance, reflection, matching, cascade, convert, electricalLength];
+export const calculations: readonly Calculation[] = [primaryConstants, secondaryConstants, fromSecondary, inputImpedance, reflection, standingWave, powerBudget, matching, cascade, convert, electricalLength];
 
 export function findCalculation(group: string, id: string): Calculation | undefined {
   return calculations.find((calculation) => calculation.group === group && calculation.id === id);

@@ -16,13 +16,27 @@ import type { Propagation } from './telegrapher';
 /** Below this size of 2 gamma l the difference of sinh(a)/a and sin(b)/b cancels; its series is good to rounding within ten terms. */
 const seriesBelow = 1;
 
+/** Each divided by exp(2 alpha l), one entry a frequency. */
+export interface LinePower {
+  /** Re(V1 I1*): into the line. */
+  readonly total: Float64Array;
+  /** The two integrals: what the line dissipates. */
+  readonly dissipated: Float64Array;
+}
+
+/** `powerAlongLine`, into the line alone. */
+export function powerIntoLine(constants: LineConstants, waves: Propagation, lengthM: number, v: ComplexColumn, i: ComplexColumn): Float64Array {
+  return powerAlongLine(constants, waves, lengthM, v, i).total;
+}
+
 /**
- * Re(V1 I1*) exp(-2 alpha l) for a termination of voltage v and current i. Range: any line, length and termination. Accuracy: a few units of
+ * Power of a line with a termination of voltage v and current i. Range: any line, length and termination. Accuracy: a few units of
  * rounding for passive terminations. Throws nothing.
  */
-export function powerIntoLine(constants: LineConstants, waves: Propagation, lengthM: number, v: ComplexColumn, i: ComplexColumn): Float64Array {
+export function powerAlongLine(constants: LineConstants, waves: Propagation, lengthM: number, v: ComplexColumn, i: ComplexColumn): LinePower {
   const { omega, attenuationNpPerM, phaseRadPerM } = waves;
-  const result = new Float64Array(omega.length);
+  const total = new Float64Array(omega.length);
+  const dissipated = new Float64Array(omega.length);
   for (let index = 0; index < omega.length; index++) {
     const R = constants.resistance[index];
     const X = constants.inductance[index] * omega[index];
@@ -48,9 +62,10 @@ export function powerIntoLine(constants: LineConstants, waves: Propagation, leng
     const yi = G * vi + B * vr;
     const voltageIntegral = vv * cc + (zr * zr + zi * zi) * ss + 2 * ((vr * zr + vi * zi) * csRe - (vi * zr - vr * zi) * csIm);
     const currentIntegral = currents * cc + (yr * yr + yi * yi) * ss + 2 * ((ir * yr + ii * yi) * csRe - (ii * yr - ir * yi) * csIm);
-    result[index] = (vr * ir + vi * ii) * decay + R * currentIntegral + G * voltageIntegral;
+    total[index] = (vr * ir + vi * ii) * decay + R * currentIntegral + G * voltageIntegral;
+    dissipated[index] = R * currentIntegral + G * voltageIntegral;
   }
-  return result;
+  return { total, dissipated };
 }
 
 /** Integrals over the length of |c|^2, |s|^2 and c s*, each times exp(-a). */

@@ -51,6 +51,11 @@ export const termination = z
 
 export type Termination = z.output<typeof termination>;
 
+/** Whether it is made of lumped parts. */
+export function hasParts(value: Termination): boolean {
+  return typeof value === 'object' && 'kind' in value && value.kind !== 'table';
+}
+
 /** What a schema cannot say: parts without any part, and frequencies outside a table. */
 export function terminationProblems(value: Termination, frequenciesHz: Float64Array, pointer: string): InputProblem[] {
   if (typeof value !== 'object' || !('kind' in value)) return [];

@@ -14,7 +14,7 @@ import { complexParts, type ComplexNumber } from '../../nouns/complex-number';
 import { frequenciesHz, frequency, pointsOf } from '../../nouns/frequency';
 import { referenceImpedance, referenceProblems } from '../../nouns/reference-impedance';
 import { finiteColumn, ResultColumns } from '../../nouns/result-columns';
-import { termination, terminationOnePort, terminationProblems, type Termination } from '../../nouns/termination';
+import { hasParts, termination, terminationOnePort, terminationProblems, type Termination } from '../../nouns/termination';
 import { inSpaceOf, magnitudes, type Phasor, type Space } from '../../numeric/phasor';
 
 const input = z
@@ -96,10 +96,6 @@ export const inputImpedance = defineCalculation({
     },
   ],
 });
-
-function hasParts(value: Termination): boolean {
-  return typeof value === 'object' && 'kind' in value && value.kind !== 'table';
-}
 
 function compute(constants: LineConstants, lengthM: number, closedBy: Termination, frequencies: Float64Array, referenceOhm: ComplexNumber) {
   const waves = propagation(constants, frequencies);

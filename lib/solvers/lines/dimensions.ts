@@ -3,9 +3,9 @@ import { z } from 'zod';
 import { conductorProblems, type Conductor } from '../nouns/conductor';
 
 /** From a tenth of a nanometre to a kilometre. */
-const [least, most] = [1e-10, 1e3];
+export const [leastM, mostM] = [1e-10, 1e3];
 
-export const diameter = (title: string, description: string, example: number) => z.number().min(least).max(most).meta({ title, description, examples: [example], 'x-unit': 'm' });
+export const diameter = (title: string, description: string, example: number) => z.number().min(leastM).max(mostM).meta({ title, description, examples: [example], 'x-unit': 'm' });
 
 type Context = z.core.$RefinementCtx;
 

@@ -9,10 +9,10 @@
  * fills the line. Zc and eps_eff are those with a real permittivity; loss enters by its share alone, so C, G are exact to first order of tan d.
  */
 import type { MethodUse, Warning } from '../calculation';
-import { speedOfLightMPerS, vacuumPermeabilityHPerM } from '../constants';
+import { speedOfLightMPerS } from '../constants';
+import { skinDepthM } from '../methods/internal-impedance';
 import { planarConductorLoss, type PlanarConductor } from '../methods/planar-conductor';
 import type { Permittivity } from '../methods/permittivity';
-import type { ConductorProperties } from '../nouns/conductor';
 import type { LineModel } from './line-constants';
 import { higherModeWarnings } from './line-warnings';
 
@@ -72,7 +72,7 @@ export function planarConstants(line: PlanarLine): LineModel {
     geometry: {
       externalInductance: column((index) => values[index][0]),
       effectivePermittivity,
-      skinDepth: omega.map((each) => skinDepth(conductor.material, each)),
+      skinDepth: skinDepthM(conductor.material, omega),
       singleModeLimitHz,
     },
   };
@@ -103,7 +103,7 @@ function outsideOver({ omega, permittivity, lossless, isDispersive }: PlanarLine
   const slopes = Array.from(omega, (w, index): Outside => {
     const epsilon = Math.max(1, real[index]);
     const byPermittivity = slope && real[index] > 1 ? scaled(slopeOf((each) => outsideOf(at(each, w)), epsilon, permittivityStep * (epsilon - lowestSmooth)), slope.real[index]) : none;
-    const byFrequency = isDispersive && w > 0 ? slopeOf((each) => outsideOf(at(epsilon, each)), w, frequencyStep * w) : none;
+    const byFrequency = isDispersive && w > stillBelow ? slopeOf((each) => outsideOf(at(epsilon, each)), w, frequencyStep * w) : none;
     return [byPermittivity[0] + byFrequency[0], byPermittivity[1] + byFrequency[1], byPermittivity[2] + byFrequency[2]];
   });
   return { values: lines.map(outsideOf), slopes, effectivePermittivity: Float64Array.from(lines, ({ effectivePermittivity }) => effectivePermittivity) };
@@ -117,6 +117,8 @@ function outsideOf({ impedance, effectivePermittivity, share }: LosslessPlanarLi
 
 /** The formulas for microstrip have a branch point at a permittivity of 0.9. */
 const lowestSmooth = 0.9;
+/** rad/s. Far below anything that a field depends on, and far above where a step would underflow. */
+const stillBelow = 1e-100;
 /** Powers up to the twelfth of frequency stand in the formulas: with this step the rest of the series is 1e-12 and rounding 1e-13. */
 const frequencyStep = 0.002;
 const permittivityStep = 0.002;
@@ -130,8 +132,4 @@ function slopeOf(f: (x: number) => Outside, x: number, h: number): Outside {
 
 function scaled([inductance, capacitance, lossFactor]: Outside, by: number): Outside {
   return [inductance * by, capacitance * by, lossFactor * by];
-}
-
-function skinDepth({ resistivityOhmM, relativePermeability }: ConductorProperties, w: number): number {
-  return resistivityOhmM === 0 ? 0 : Math.sqrt((2 * resistivityOhmM) / (w * vacuumPermeabilityHPerM * relativePermeability));
 }

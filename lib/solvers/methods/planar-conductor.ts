@@ -5,6 +5,7 @@
 import type { Method, MethodUse, Warning } from '../calculation';
 import { vacuumPermeabilityHPerM } from '../constants';
 import type { ConductorProperties } from '../nouns/conductor';
+import type { SeriesPart } from './internal-impedance';
 
 export const incrementalInductance: Method = {
   id: 'incremental-inductance',
@@ -52,12 +53,7 @@ export interface PlanarConductor {
   readonly roughnessM: number;
 }
 
-/** Ohm/m and H/m over frequency, with their derivatives to omega. */
-export interface PlanarConductorLoss {
-  readonly resistance: Float64Array;
-  readonly inductance: Float64Array;
-  readonly resistanceSlope: Float64Array;
-  readonly inductanceSlope: Float64Array;
+export interface PlanarConductorLoss extends SeriesPart {
   readonly methods: readonly MethodUse[];
   readonly warnings: readonly Warning[];
 }
@@ -96,15 +92,17 @@ export function planarConductorLoss(conductor: PlanarConductor, omega: Float64Ar
   }
   const highest = omega.reduce((most, each) => Math.max(most, each), 0);
   const lowest = omega.reduce((least, each) => Math.min(least, each), Infinity);
-  const isThin = thicknessM * Math.sqrt(0.5 * lowest * (mu / rho)) < leastSkinDepths;
+  const skinDepths = (lengthM: number, w: number) => lengthM * Math.sqrt(0.5 * w * (mu / rho));
+  const thickness = skinDepths(thicknessM, lowest);
+  const isThin = thickness < leastSkinDepths;
   return {
     ...columns,
     methods: [
       { method: incrementalInductance, inRange: !isThin },
-      ...(roughnessM > 0 ? [{ method: hammerstadRoughness, inRange: roughnessM * Math.sqrt(0.5 * highest * (mu / rho)) <= 1 }] : []),
+      ...(roughnessM > 0 ? [{ method: hammerstadRoughness, inRange: skinDepths(roughnessM, highest) <= 1 }] : []),
     ],
     warnings: isThin
-      ? [{ code: 'thin_conductor', pointer: '/thickness_m', detail: `thickness_m should be at least ${leastSkinDepths} skin depths for the current to be a skin; at the lowest frequency it is ${(thicknessM * Math.sqrt(0.5 * lowest * (mu / rho))).toPrecision(3)}, and the resistance leads over to that at direct current` }]
+      ? [{ code: 'thin_conductor', pointer: '/thickness_m', detail: `thickness_m should be at least ${leastSkinDepths} skin depths for the current to be a skin; at the lowest frequency it is ${Number(thickness.toPrecision(3))}, and the resistance leads over to that at direct current` }]
       : [],
   };
 }

@@ -195,6 +195,9 @@ REACTIVE = [
     ("direct current, open, leaking", CABLE, 3.2, "open", 0, {}),
     ("direct current, no conductance, short", ON_CHIP, 2e-3, "short", 0, {}),
     ("line on a chip, open", ON_CHIP, 2e-3, "open", 5e9, {}),
+    ("very low loss, open: minima of 1e-9 V", CRYOGENIC, 3.3, "open", 1e8, {}),
+    ("very low loss, short: currents of 1e-11 A at the maxima", CRYOGENIC, 3.3, "short", 1e8, {}),
+    ("line on a chip at 1 kHz, open: the least voltage is at the open end", ON_CHIP, 2e-3, "open", 1000, {}),
     ("without loss, open", FIFTY, 3.1, "open", 2e8, {}),
 ]
 FAR = [

@@ -84,6 +84,8 @@ export interface DrivenProfile {
   readonly v: ComplexColumn;
   readonly i: ComplexColumn;
   readonly power: Float64Array;
+  /** By what |V(x)| exp(-alpha x) of the load's own v and i is to be multiplied. */
+  readonly gain: Float64Array;
 }
 
 const vanishing = 8 * Number.EPSILON;
@@ -118,8 +120,8 @@ export function drivenProfile(constants: LineConstants, waves: Propagation, leng
     const decay = places.map((z) => Math.exp(-alpha * z));
     const travelled = space.from(decay.map((each, index) => each * Math.cos(beta * places[index])), decay.map((each, index) => -each * Math.sin(beta * places[index])));
     const factor = travelled.mul(space.constant(source.voltage).div(space.constant(input)));
-    const gain = magnitude(source.voltage.re, source.voltage.im) / size;
-    return { v: space.column(v.mul(factor)), i: space.column(i.mul(factor)), power: power.map((each, index) => each * (gain * decay[index]) ** 2) };
+    const gain = decay.map((each) => (magnitude(source.voltage.re, source.voltage.im) / size) * each);
+    return { v: space.column(v.mul(factor)), i: space.column(i.mul(factor)), power: power.map((each, index) => each * gain[index] ** 2), gain };
   });
 }
 

@@ -31,6 +31,8 @@ export interface Extremum {
   /** m, from the termination. */
   readonly x: number;
   readonly isMaximum: boolean;
+  /** |V| of a minimum, |Zc I| of a maximum, over exp(alpha x), where it is small and so better known than as a sum of waves; else null. */
+  readonly vanishing: number | null;
 }
 
 export interface Extrema {
@@ -52,7 +54,7 @@ export function voltageExtrema(line: TerminatedLine, lengthM: number, from: numb
   const { pieces, isCut } = wave.pieces(from, to, mostPeriods);
   const extrema = pieces.flatMap((piece) => {
     const x = wave.zeroOf(piece, lengthM);
-    return x === null ? [] : [{ x, isMaximum: piece.rises }];
+    return x === null ? [] : [{ x, isMaximum: piece.rises, vanishing: wave.vanishingAt(x, piece.rises) }];
   });
   return { extrema, isCut };
 }
@@ -63,7 +65,7 @@ function straightMinimum({ series, v, i }: TerminatedLine, lengthM: number): Ext
   const size = magnitude(drop.re, drop.im);
   if (size === 0) return [];
   const x = -(v.re * (drop.re / size) + v.im * (drop.im / size)) / size;
-  return x >= 0 && x <= lengthM ? [{ x: x + 0, isMaximum: false }] : [];
+  return x >= 0 && x <= lengthM ? [{ x: x + 0, isMaximum: false, vanishing: null }] : [];
 }
 
 /** The line and its load at one of the frequencies. */

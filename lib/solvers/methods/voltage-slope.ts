@@ -45,6 +45,8 @@ interface Turn {
 }
 
 const vanishing = 8 * Number.EPSILON;
+/** Of a sum of two waves that cancel to less than this part, two digits are lost. */
+const smallPart = 0.01;
 
 export class VoltageSlope {
   private readonly alpha: number;
@@ -60,6 +62,8 @@ export class VoltageSlope {
   private readonly difference: number;
   /** |A B*|, of which the reflection is the ratio to P. */
   private readonly both: number;
+  /** The larger of |v| and |Zc i|. */
+  private readonly unit: number;
   private readonly r: number;
   private readonly phase: number;
   private readonly offset: number;
@@ -74,6 +78,7 @@ export class VoltageSlope {
     const sizeV = magnitude(v.re, v.im);
     const sizeU = magnitude(u.re, u.im);
     const unit = Math.max(sizeV, sizeU);
+    this.unit = unit;
     const [vr, vi, ur, ui] = [v.re / unit, v.im / unit, u.re / unit, u.im / unit];
     this.product = { re: ur * vr + ui * vi, im: ui * vr - ur * vi };
     const [ir, ii] = [i.re / unit, i.im / unit];
@@ -132,6 +137,24 @@ export class VoltageSlope {
       scale += Math.abs(term);
     }
     return { value, scale };
+  }
+
+  /**
+   * |V| at a minimum x, and |Zc I| at a maximum, over exp(alpha x); null where it is no small part of the waves, and V and I as sums of them are as good.
+   * With sin psi = r sinh u, what stands on the one side is (|A| e^(alpha x) - |B| e^(-alpha x))^2 + 2 |A B*| (1 - |cos psi|), and neither term cancels.
+   */
+  vanishingAt(x: number, isMaximum: boolean): number | null {
+    const { r, sum, product, both, unit } = this;
+    const loss = 2 * this.alpha * x;
+    const decay = Math.exp(-loss);
+    // On a line of much loss the voltage may be least where the waves add.
+    const isOpposed = Math.cos(2 * this.beta * x + this.phase) < 0;
+    if (isOpposed === isMaximum) return null;
+    const powers = 0.5 * product.re * (1 + decay * decay) - 0.25 * sum * Math.expm1(-2 * loss);
+    const amplitudes = Math.sqrt(Math.max(0, 0.5 * (0.5 * sum + product.re))) + decay * Math.sqrt(Math.max(0, 0.5 * (0.5 * sum - product.re)));
+    const sine = (r * powers) / (2 * both * decay);
+    const square = (powers / amplitudes) ** 2 + (2 * both * decay * sine * sine) / (1 + Math.sqrt(1 - sine * sine));
+    return Math.sqrt(square) < smallPart * amplitudes ? unit * Math.sqrt(square) : null;
   }
 
   /** The root of the slope between two neighbouring turns. At an end of the line, a slope that is only rounding is one. */

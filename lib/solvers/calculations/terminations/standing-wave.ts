@@ -10,6 +10,7 @@ import { telegrapherTwoPort } from '../../methods/line-two-port';
 import { lumpedImpedance } from '../../methods/one-port';
 import { standingWaves, terminatedLine, voltageExtrema, waveRatio, type Extremum } from '../../methods/standing-wave';
 import { propagation, type Propagation } from '../../methods/telegrapher';
+import type { TerminatedLine } from '../../methods/voltage-slope';
 import { complexForms, complexNumber, complexParts } from '../../nouns/complex-number';
 import { finiteColumn, ResultColumns } from '../../nouns/result-columns';
 import { hasParts, termination, terminationOnePort, terminationProblems } from '../../nouns/termination';
@@ -150,8 +151,8 @@ function compute(given: Input, constants: LineConstants, waves: Propagation, fre
     power_w: columns.real(power, gap('/power_w')),
     voltage_magnitude_v: columns.real(sizes(v), gap('/voltage_magnitude_v')),
     current_magnitude_a: columns.real(sizes(i), gap('/current_magnitude_a')),
-    maxima: listed(found.extrema.filter(({ isMaximum }) => isMaximum), length, along),
-    minima: listed(found.extrema.filter(({ isMaximum }) => !isMaximum), length, along),
+    maxima: listed(found.extrema.filter(({ isMaximum }) => isMaximum), length, ends.characteristicImpedance, along),
+    minima: listed(found.extrema.filter(({ isMaximum }) => !isMaximum), length, ends.characteristicImpedance, along),
     vswr_at_termination: Number.isFinite(ratio) ? ratio : null,
   };
   const warnings: Warning[] = [...columns.warnings];
@@ -165,11 +166,17 @@ function sizes({ re, im }: { re: Float64Array; im: Float64Array }): Float64Array
 }
 
 /** From the source on; none where the line has no finite voltages. */
-function listed(extrema: readonly Extremum[], length: number, along: (places: Float64Array) => DrivenProfile | null) {
-  const places = Float64Array.from(extrema.slice(0, mostExtrema), ({ x }) => length - x).reverse();
-  const there = places.length > 0 ? along(places) : null;
+function listed(extrema: readonly Extremum[], length: number, impedance: TerminatedLine['characteristicImpedance'], along: (places: Float64Array) => DrivenProfile | null) {
+  const fromSource = extrema.slice(0, mostExtrema).reverse();
+  const there = fromSource.length > 0 ? along(Float64Array.from(fromSource, ({ x }) => length - x)) : null;
   if (there === null) return [];
   const voltage = sizes(there.v);
   const current = sizes(there.i);
-  return Array.from(places, (position, index) => ({ position_m: position, voltage_v: voltage[index], current_a: current[index] })).filter(({ voltage_v, current_a }) => Number.isFinite(voltage_v) && Number.isFinite(current_a));
+  const inOhm = impedance === null ? NaN : magnitude(impedance.re, impedance.im);
+  const places = fromSource.map(({ x, isMaximum, vanishing }, index) => ({
+    position_m: length - x,
+    voltage_v: vanishing !== null && !isMaximum ? vanishing * there.gain[index] : voltage[index],
+    current_a: vanishing !== null && isMaximum ? (vanishing / inOhm) * there.gain[index] : current[index],
+  }));
+  return places.filter(({ voltage_v, current_a }) => Number.isFinite(voltage_v) && Number.isFinite(current_a));
 }

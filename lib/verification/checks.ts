@@ -6,6 +6,7 @@ import { findCalculation } from '../solvers/registry';
 import matching from '../../tests/reference/matching.json';
 import given from '../../tests/reference/given.json';
 import lumped from '../../tests/reference/lumped.json';
+import microstrip from '../../tests/reference/microstrip.json';
 import networks from '../../tests/reference/networks.json';
 import drivenLines from '../../tests/reference/driven-lines.json';
 import reflection from '../../tests/reference/reflection.json';
@@ -37,7 +38,7 @@ export interface CheckFile {
   readonly checks: readonly Check[];
 }
 
-export const checkFiles: readonly CheckFile[] = [telegrapher, networks, reflection, drivenLines, matching, given, round, lumped] as unknown as readonly CheckFile[];
+export const checkFiles: readonly CheckFile[] = [telegrapher, networks, reflection, drivenLines, matching, given, round, lumped, microstrip] as unknown as readonly CheckFile[];
 
 /** A value as the engine computes it now. */
 export type ComputedValue = number | boolean | string | null | { readonly re: number; readonly im: number };

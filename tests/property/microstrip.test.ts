@@ -146,6 +146,20 @@ describe('a microstrip line', () => {
     );
   });
 
+  it('does not step where one relation for the impedance leads over to the other, nor at the ends of their range', () => {
+    run(
+      fc.property(decades(-2, 3), fc.constantFrom(1.1, 1.3, 20), fc.constantFrom(0.1, 100), decades(9, 13), (u, er, ratio, frequency) => {
+        const impedance = (width: number, epsilon: number) => {
+          const given = { u: width, tau: 0 };
+          return dispersedMicrostrip(microstripLine(given, epsilon), given, epsilon, 1e-3, frequency).impedance;
+        };
+        expect(impedance(u, er * (1 + 1e-9)) / impedance(u, er * (1 - 1e-9))).toBeCloseTo(1, 6);
+        expect(impedance(ratio * (1 + 1e-9), er) / impedance(ratio * (1 - 1e-9), er)).toBeCloseTo(1, 6);
+        expect(impedance(u, er)).toBeGreaterThan(0);
+      }),
+    );
+  });
+
   it('recedes by the derivative of its inductance', () => {
     run(
       fc.property(decades(-2, 2), decades(-3, 0), decades(-4, -1), (u, tau, h) => {
@@ -166,7 +180,8 @@ describe('a microstrip line', () => {
     expect(codes({ dielectric: { relative_permittivity: 128.1 } })).toEqual(['outside_range /line/dielectric']);
     expect(codes({ thickness_m: 0.19e-3 })).toEqual([]);
     expect(codes({ thickness_m: 0.21e-3 })).toEqual(['narrow_and_thick /line/thickness_m']);
-    expect(codes({ width_m: 0.05e-3, thickness_m: 0.06e-3 })).toEqual(['narrow_and_thick /line/thickness_m']);
+    expect(codes({ width_m: 0.05e-3, thickness_m: 0.026e-3 })).toEqual(['narrow_and_thick /line/thickness_m']);
+    expect(codes({ width_m: 0.05e-3, thickness_m: 0.024e-3 })).toEqual([]);
     expect(codes({ conductor: 'copper' })).toEqual(['conductor_loss_left_out /line/thickness_m']);
     expect(codes({ conductor: 'copper', thickness_m: 35e-6 }, 20e6)).toEqual(['thin_conductor /line/thickness_m']);
     expect(codes({ conductor: 'copper', thickness_m: 35e-6 }, 40e6)).toEqual([]);

@@ -275,7 +275,7 @@ def loss_checks():
         conductance = 2 * math.pi * 1e9 * er * 0.01 * slope / (MU0 * LIGHT**2)
         given = {"line": microstrip(u, er, dielectric={"loss_tangent": 0.01}), "frequency_hz": 1e9}
         given["line"]["dielectric"]["relative_permittivity"] = er
-        yield check("lines/primary-constants", f"microstrip: dielectric loss, width {u} heights, permittivity {er}", share, given, {"/conductance_s_per_m": nine(conductance)}, 0.04)
+        yield check("lines/primary-constants", f"microstrip: dielectric loss, width {u} heights, permittivity {er}", share, given, {"/conductance_s_per_m": nine(conductance)}, 0.01)
 
 
 def published_checks():

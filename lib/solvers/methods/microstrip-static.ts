@@ -23,7 +23,7 @@ export const microstripStatic: Method = {
     { symbol: String.raw`\Delta u_1, \Delta u_r`, meaning: 'what thickness adds to the width, in vacuum and on the substrate' },
   ],
   range: 'width 0.01 to 100 heights, permittivity to 128; thickness to 0.2 heights and half the width; frequencies at which dispersion is small',
-  accuracy: 'without thickness: effective permittivity 0.2 % (published); measured here: impedance 0.11 %, effective permittivity 0.22 %, and with thickness 0.4 % and 0.6 %; conductance 4 %',
+  accuracy: 'without thickness: effective permittivity 0.2 % (published); measured here: impedance 0.11 %, effective permittivity 0.22 %, and with thickness 0.4 % and 0.6 %; conductance 1 %',
 };
 
 /** Where the method holds. */

@@ -23,8 +23,8 @@ export const incrementalInductance: Method = {
     { symbol: 'R_d', meaning: 'resistance of the strip at direct current; that of the planes is taken as none', unit: 'ohm/m' },
     { symbol: 'L_i', meaning: 'inductance inside the conductors', unit: 'H/m' },
   ],
-  range: 'conductors thicker than 3 skin depths; below, the join has the limit at direct current right and the way to it about right',
-  accuracy: 'some percent where the skin is thin (measured here, see the checks); between skin and direct current 10 to 20 %, by estimate',
+  range: 'conductors thicker than 3 skin depths; below, the join leads over to the resistance at direct current',
+  accuracy: 'measured here against the rule on a field solution of microstrip: 1.2 % for widths from 0.3 heights, 4 % at 0.1 heights; the join measured on a round wire, where the answer is known: 7 % of the resistance, 10 % of the inductance inside',
 };
 
 export const hammerstadRoughness: Method = {

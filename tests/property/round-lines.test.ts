@@ -98,6 +98,50 @@ describe('a line of round or flat conductors', () => {
   });
 });
 
+describe('two near wires', () => {
+  const gap = decades(-3, 1);
+
+  it('have more R than two by themselves, and in the end (s/d)/sqrt((s/d)^2 - 1) times as much', () => {
+    run(
+      fc.property(size, gap, decades(0, 9), (d, g, f) => {
+        const line = { kind: 'two_wire', conductor_diameter_m: d, spacing_m: d * (1 + g) };
+        const crowded = primary(line, [0, f]);
+        const alone = primary({ ...line, proximity: false }, [0, f]);
+        expect(crowded.resistance_ohm_per_m[0] / alone.resistance_ohm_per_m[0]).toBeCloseTo(1, 13);
+        expect(crowded.resistance_ohm_per_m[1]).toBeGreaterThanOrEqual(alone.resistance_ohm_per_m[1] * (1 - 1e-13));
+        expect(crowded.inductance_h_per_m[1]).toBeGreaterThan(crowded.external_inductance_h_per_m[1]);
+        // Skin and gap in one: the limit is reached as the skin depth over the gap.
+        const thin = 1e15;
+        if (d * g < 1e-5) return;
+        const [R] = primary(line, thin).resistance_ohm_per_m;
+        const [R0] = primary({ ...line, proximity: false }, thin).resistance_ohm_per_m;
+        const x = line.spacing_m / d;
+        expect(R / R0 / (x / Math.sqrt((x - 1) * (x + 1)))).toBeCloseTo(1, 2);
+      }),
+      100,
+    );
+  });
+
+  it('answer the same in a long sweep as one by one', () => {
+    run(
+      fc.property(size, gap, fc.constantFrom(1, 50), (d, g, relative_permeability) => {
+        const line = { kind: 'two_wire', conductor_diameter_m: d, spacing_m: d * (1 + g), conductor: { resistivity_ohm_m: 2e-8, relative_permeability } };
+        const sweep = primary(line, { start: 1, stop: 1e12, points: 601, spacing: 'log' }) as Constants & { frequency_hz: number[] };
+        for (let index = 0; index < 601; index += 75) {
+          const single = primary(line, sweep.frequency_hz[index]);
+          for (const name of ['resistance_ohm_per_m', 'inductance_h_per_m'] as const) expect(Math.abs(sweep[name][index] / single[name][0] - 1)).toBeLessThanOrEqual(2e-14);
+        }
+      }),
+      12,
+    );
+  });
+
+  it('have an R that grows at every step of 20,001', () => {
+    const { resistance_ohm_per_m: R } = primary({ kind: 'two_wire', conductor_diameter_m: 1e-3, spacing_m: 1.02e-3 }, { start: 1, stop: 1e12, points: 20_001, spacing: 'log' });
+    for (let index = 1; index < R.length; index++) expect(R[index] >= R[index - 1] * (1 - 1e-13)).toBe(true);
+  });
+});
+
 describe('every accepted geometry', () => {
   const edge = (...values: number[]) => fc.oneof(fc.constantFrom(...values), decades(-10, 3));
   const conductor = fc.oneof(fc.constantFrom('copper', 'perfect', 'steel'), fc.record({ resistivity_ohm_m: fc.constantFrom(0, 1e-300, 1e-17, 1e-8, 1e3), relative_permeability: fc.constantFrom(1e-3, 1, 1e6), temperature_coefficient_per_k: fc.constantFrom(-0.02, 0, 0.02) }));

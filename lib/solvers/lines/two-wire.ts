@@ -1,13 +1,12 @@
 /** Two parallel round wires of the same kind. */
 import { z } from 'zod';
 import type { Method } from '../calculation';
-import { ImpossibleInput } from '../errors';
 import { vacuumPermeabilityHPerM, vacuumPermittivityFPerM } from '../constants';
 import { roundConductors, skinDepthM, wirePart } from '../methods/internal-impedance';
 import { widebandDebye } from '../methods/permittivity';
 import { conductor, conductorAt, temperature } from '../nouns/conductor';
 import { dielectric, dielectricOver } from '../nouns/dielectric';
-import { crowdedPair, harmonicsFor, proximityEffect } from '../methods/proximity';
+import { crowdedPair, harmonicsOf, proximityEffect } from '../methods/proximity';
 import { acoshOfOnePlus } from '../numeric/acosh';
 import { conductorIssues, diameter, mustExceed } from './dimensions';
 import { defineLineKind } from './line-constants';
@@ -26,9 +25,6 @@ export const twoWireField: Method = {
   range: 'equal wires in one dielectric; spacing far below the wavelength',
   accuracy: 'exact for perfect conductors; 1e-12 relative in float64',
 };
-
-/** Some tenths of a second: points times harmonics cubed. */
-const mostWork = 4e8;
 
 export const twoWire = defineLineKind({
   schema: z
@@ -54,11 +50,7 @@ export const twoWire = defineLineKind({
     const wire = conductorAt(line.conductor, temperature_c);
     const arcosh = acoshOfOnePlus((s - d) / d);
     const isCrowded = proximity && wire.resistivityOhmM > 0;
-    const { harmonics, isEnough } = harmonicsFor(arcosh);
-    const mostPoints = Math.floor(mostWork / harmonics ** 3);
-    if (isCrowded && omega.length > mostPoints) {
-      throw new ImpossibleInput([{ pointer: '/proximity', code: 'too_large', detail: `proximity must be false for more than ${mostPoints} frequencies at this spacing; got ${omega.length}` }]);
-    }
+    const crowding = isCrowded ? harmonicsOf(d, arcosh, wire, omega) : undefined;
     const isolated = wirePart(d, wire, omega);
     const externalInductance = (vacuumPermeabilityHPerM / Math.PI) * arcosh;
     return uniformField({
@@ -66,13 +58,13 @@ export const twoWire = defineLineKind({
       externalInductance,
       vacuumCapacitance: (Math.PI * vacuumPermittivityFPerM) / arcosh,
       permittivity: dielectricOver(line.dielectric, omega),
-      parts: isCrowded ? [isolated, isolated, crowdedPair(d, s, wire, omega, harmonics)] : [isolated, isolated],
+      parts: crowding ? [isolated, isolated, crowdedPair(d, s, arcosh, wire, omega, crowding)] : [isolated, isolated],
       skinDepth: skinDepthM(wire, omega),
       singleModeLimitHz: Infinity,
-      methods: [{ method: twoWireField, inRange: true }, { method: roundConductors, inRange: true }, ...(isCrowded ? [{ method: proximityEffect, inRange: isEnough }] : [])],
+      methods: [{ method: twoWireField, inRange: true }, { method: roundConductors, inRange: true }, ...(crowding ? [{ method: proximityEffect, inRange: crowding.isEnough }] : [])],
       warnings:
-        isCrowded && !isEnough
-          ? [{ code: 'wires_nearly_touch', pointer: '/spacing_m', detail: `the crowding of current converges slowly at this spacing; ${harmonics} harmonics were taken, and R may be a few percent low` }]
+        crowding && !crowding.isEnough
+          ? [{ code: 'wires_nearly_touch', pointer: '/spacing_m', detail: `the crowding of current converges slowly at this spacing; the ${crowding.harmonics} harmonics that are taken may leave out ${crowding.leftOut.toPrecision(1)} of R and L` }]
           : [],
     });
   },

@@ -10,14 +10,15 @@ import { microstrip } from './microstrip';
 import { parallelPlate } from './parallel-plate';
 import { rlgc } from './rlgc';
 import { rlgcTable } from './rlgc-table';
+import { stripline } from './stripline';
 import { twistedPair } from './twisted-pair';
 import { twoWire } from './two-wire';
 import { wireOverPlane } from './wire-over-plane';
 
-const kinds = [rlgc, rlgcTable, lossless, datasheet, coaxial, twoWire, wireOverPlane, parallelPlate, twistedPair, microstrip] as const;
+const kinds = [rlgc, rlgcTable, lossless, datasheet, coaxial, twoWire, wireOverPlane, parallelPlate, twistedPair, microstrip, stripline] as const;
 
 export const line = z
-  .discriminatedUnion('kind', [rlgc.schema, rlgcTable.schema, lossless.schema, datasheet.schema, coaxial.schema, twoWire.schema, wireOverPlane.schema, parallelPlate.schema, twistedPair.schema, microstrip.schema])
+  .discriminatedUnion('kind', [rlgc.schema, rlgcTable.schema, lossless.schema, datasheet.schema, coaxial.schema, twoWire.schema, wireOverPlane.schema, parallelPlate.schema, twistedPair.schema, microstrip.schema, stripline.schema])
   .meta({ id: 'Line', title: 'Line', description: 'A uniform two-conductor line.' });
 
 export type Line = z.output<typeof line>;

@@ -49,6 +49,8 @@ export const coaxial = defineLineKind({
     .meta({ id: 'CoaxialLine', title: 'Coaxial', description: 'A coaxial line by its diameters and materials.' }),
   methods: [coaxialField, roundConductors, widebandDebye],
   dimensions: ['inner_diameter_m', 'outer_diameter_m'],
+  // The wall of the shield takes a Taylor step for every so much of its thickness, in radii and in skin depths.
+  microseconds: ({ outer_diameter_m: D, shield_thickness_m: thickness }, points) => points * (thickness === undefined ? 2 : 5 + 2 * Math.log1p((2 * thickness) / D)),
   model(line, frequenciesHz) {
     const { inner_diameter_m: d, outer_diameter_m: D, shield_thickness_m: thickness, temperature_c } = line;
     const omega = frequenciesHz.map((each) => 2 * Math.PI * each);

@@ -43,6 +43,8 @@ export interface LineKind<Schema extends z.ZodType = z.ZodType> {
   readonly methods: readonly Method[];
   /** The dimensions that lines/dimension can solve for; left out where the kind is not a geometry. */
   readonly dimensions?: readonly (keyof z.output<Schema> & string)[];
+  /** About what the model takes over so many points, on a slow machine; left out where it takes but a few microseconds a point. */
+  microseconds?(line: z.output<Schema>, points: number): number;
   /** Pure. Frequencies in Hz, 0 included. Throws `ImpossibleInput` with pointers relative to the line. */
   model(line: z.output<Schema>, frequenciesHz: Float64Array): LineModel;
 }

@@ -10,6 +10,7 @@ import { microstrip } from './microstrip';
 import { parallelPlate } from './parallel-plate';
 import { rlgc } from './rlgc';
 import { rlgcTable } from './rlgc-table';
+import { solvedLine } from './solved-lines';
 import { stripline } from './stripline';
 import { twistedPair } from './twisted-pair';
 import { twoWire } from './two-wire';
@@ -32,7 +33,7 @@ export const lineMethods: readonly Method[] = [...new Set(kinds.flatMap((kind): 
 const byKind: ReadonlyMap<string, LineKind> = new Map(kinds.map((kind) => [kind.schema.shape.kind.value, kind as unknown as LineKind]));
 
 /**
- * A line over frequency. Range: any line that its schema accepts. `pointer` is where the line stands in the input: the pointers of warnings
+ * A line over frequency. Range: any line that its schema accepts, over frequencies that stay as they are while lines are solved over them. `pointer` is where the line stands in the input: the pointers of warnings
  * and refusals begin with it. Throws `ImpossibleInput` where the line cannot be at these frequencies.
  */
 export function lineOverFrequency(value: Line, frequenciesHz: Float64Array, pointer = '/line'): LineModel {
@@ -42,7 +43,7 @@ export function lineOverFrequency(value: Line, frequenciesHz: Float64Array, poin
 
 function modelOf(kind: LineKind, value: Line, frequenciesHz: Float64Array, pointer: string): LineModel {
   try {
-    return kind.model(value, frequenciesHz);
+    return solvedLine(kind, value, frequenciesHz);
   } catch (error) {
     if (!(error instanceof ImpossibleInput)) throw error;
     throw new ImpossibleInput(error.problems.map((problem) => ({ ...problem, pointer: pointer + problem.pointer })));

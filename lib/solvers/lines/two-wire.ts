@@ -6,7 +6,7 @@ import { roundConductors, skinDepthM, wirePart } from '../methods/internal-imped
 import { widebandDebye } from '../methods/permittivity';
 import { conductor, conductorAt, temperature } from '../nouns/conductor';
 import { dielectric, dielectricOver } from '../nouns/dielectric';
-import { crowdedPair, harmonicsOf, proximityEffect } from '../methods/proximity';
+import { crowdedPair, crowdingMicroseconds, harmonicsOf, proximityEffect } from '../methods/proximity';
 import { acoshOfOnePlus } from '../numeric/acosh';
 import { conductorIssues, diameter, mustExceed } from './dimensions';
 import { defineLineKind } from './line-constants';
@@ -44,6 +44,7 @@ export const twoWire = defineLineKind({
     .meta({ id: 'TwoWireLine', title: 'Two wires', description: 'Two parallel round wires by their dimensions and materials.' }),
   methods: [twoWireField, roundConductors, proximityEffect, widebandDebye],
   dimensions: ['conductor_diameter_m', 'spacing_m'],
+  microseconds: ({ conductor_diameter_m: d, spacing_m: s, proximity }, points) => points + (proximity ? crowdingMicroseconds(acoshOfOnePlus((s - d) / d), points) : 0),
   model(line, frequenciesHz) {
     const { conductor_diameter_m: d, spacing_m: s, proximity, temperature_c } = line;
     const omega = frequenciesHz.map((each) => 2 * Math.PI * each);

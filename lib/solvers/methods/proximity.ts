@@ -42,11 +42,20 @@ export interface Harmonics {
 
 /** How many harmonics the spacing wants: the images of perfect wires fall as exp(-2 n arcosh(s/d)); six times the first that is left out was the most measured. */
 export function harmonicsOf(diameterM: number, arcosh: number, conductor: ConductorProperties, omega: Float64Array): Harmonics {
-  const harmonics = Math.min(mostHarmonics, Math.ceil(18.5 / arcosh) + 6);
+  const harmonics = harmonicsFor(arcosh);
   const highest = omega.reduce((most, each) => Math.max(most, each), 0);
   const isSmooth = Math.sqrt(highest * diffusionPerOmega(diameterM, conductor)) <= smoothUpTo;
   const leftOut = isSmooth ? 0 : 6 * Math.exp(-2 * harmonics * arcosh);
   return { harmonics, leftOut, isEnough: leftOut <= 1e-12 };
+}
+
+function harmonicsFor(arcosh: number): number {
+  return Math.min(mostHarmonics, Math.ceil(18.5 / arcosh) + 6);
+}
+
+/** About: a matrix for each of the first 400 points, and some nodes to interpolate between for each of the others. */
+export function crowdingMicroseconds(arcosh: number, points: number): number {
+  return Math.min(points, 400) * (15 + 1.2e-3 * harmonicsFor(arcosh) ** 3) + 2 * points;
 }
 
 /** |z|^2/omega. */

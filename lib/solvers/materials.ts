@@ -28,8 +28,11 @@ export const referenceTemperatureC = 20;
 
 const handbook = 'CRC Handbook of Chemistry and Physics, 97th ed., section 12, electrical resistivity of pure metals (from memory)';
 
+/** 1/58 ohm mm2/m, IEC 60028; written out, for a compiler may fold a division to a neighbouring number. */
+const annealedCopperOhmM = 1.724137931034483e-08;
+
 export const conductors = [
-  { name: 'copper', title: 'Copper, annealed', resistivityOhmM: 1 / 58e6, relativePermeability: 1, temperatureCoefficientPerK: 0.00393, source: 'IEC 60028:1925', condition: 'international annealed copper standard, 20 degC' },
+  { name: 'copper', title: 'Copper, annealed', resistivityOhmM: annealedCopperOhmM, relativePermeability: 1, temperatureCoefficientPerK: 0.00393, source: 'IEC 60028:1925', condition: 'international annealed copper standard, 20 degC' },
   { name: 'copper_hard_drawn', title: 'Copper, hard-drawn', resistivityOhmM: 1.777e-8, relativePermeability: 1, temperatureCoefficientPerK: 0.00381, source: 'ASTM B1, 97 % conductivity (from memory)', condition: 'hard-drawn wire, 20 degC' },
   { name: 'silver', title: 'Silver', resistivityOhmM: 1.587e-8, relativePermeability: 1, temperatureCoefficientPerK: 0.0038, source: handbook, condition: 'pure, 20 degC' },
   { name: 'gold', title: 'Gold', resistivityOhmM: 2.214e-8, relativePermeability: 1, temperatureCoefficientPerK: 0.0034, source: handbook, condition: 'pure, 20 degC' },

@@ -12,6 +12,7 @@ import drivenLines from '../../tests/reference/driven-lines.json';
 import reflection from '../../tests/reference/reflection.json';
 import round from '../../tests/reference/round.json';
 import wires from '../../tests/reference/wires.json';
+import striplines from '../../tests/reference/striplines.json';
 import telegrapher from '../../tests/reference/telegrapher.json';
 
 /** A number as its digits; a complex one in parts; null where there is none. */
@@ -39,7 +40,7 @@ export interface CheckFile {
   readonly checks: readonly Check[];
 }
 
-export const checkFiles: readonly CheckFile[] = [telegrapher, networks, reflection, drivenLines, matching, given, round, wires, lumped, microstrip] as unknown as readonly CheckFile[];
+export const checkFiles: readonly CheckFile[] = [telegrapher, networks, reflection, drivenLines, matching, given, round, wires, lumped, microstrip, striplines] as unknown as readonly CheckFile[];
 
 /** A value as the engine computes it now. */
 export type ComputedValue = number | boolean | string | null | { readonly re: number; readonly im: number };

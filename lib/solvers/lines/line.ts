@@ -3,6 +3,7 @@ import { z } from 'zod';
 import { mergeMethods, type Method } from '../calculation';
 import { ImpossibleInput } from '../errors';
 import { coaxial } from './coaxial';
+import { coplanar } from './coplanar';
 import { datasheet } from './datasheet';
 import type { LineKind, LineModel } from './line-constants';
 import { lossless } from './lossless';
@@ -20,6 +21,8 @@ const kinds = [rlgc, rlgcTable, lossless, datasheet, coaxial, twoWire, wireOverP
 
 export const line = z
   .discriminatedUnion('kind', [rlgc.schema, rlgcTable.schema, lossless.schema, datasheet.schema, coaxial.schema, twoWire.schema, wireOverPlane.schema, parallelPlate.schema, twistedPair.schema, microstrip.schema, stripline.schema])
+const kinds = [rlgc, rlgcTable, lossless, datasheet, coaxial, twoWire, wireOverPlane, parallelPlate, twistedPair, microstrip, stripline, coplanar] as const;
+  .discriminatedUnion('kind', [rlgc.schema, rlgcTable.schema, lossless.schema, datasheet.schema, coaxial.schema, twoWire.schema, wireOverPlane.schema, parallelPlate.schema, twistedPair.schema, microstrip.schema, stripline.schema, coplanar.schema])
   .meta({ id: 'Line', title: 'Line', description: 'A uniform two-conductor line.' });
 
 export type Line = z.output<typeof line>;

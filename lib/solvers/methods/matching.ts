@@ -65,6 +65,7 @@ export function isBuildable(elements: readonly Element[]): boolean {
 
 /** 1.234e-9 H as "1.234 nH", for a sentence. */
 export function inWords(value: number, unit: string): string {
+  if (!Number.isFinite(value)) return `unbounded ${unit}`;
   const prefixes = ['f', 'p', 'n', 'µ', 'm', '', 'k', 'M', 'G'];
   const step = value === 0 ? 0 : Math.max(-5, Math.min(3, Math.floor(Math.log10(Math.abs(value)) / 3)));
   return `${Number((value / 1000 ** step).toPrecision(4))} ${prefixes[step + 5]}${unit}`;

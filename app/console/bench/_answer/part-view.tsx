@@ -17,6 +17,7 @@ export function PartView({ part, nested = false }: { readonly part: ResultPart; 
   const count = Math.max(1, ...[...(part.axis ? [part.axis] : []), ...part.columns].map(lengthOf));
   const [index, setIndex] = useState(() => Math.floor(count / 2));
   const cursor: Cursor = { index: Math.min(index, count - 1), count, moveTo: setIndex };
+  const Heading = nested ? 'h3' : 'h2';
   const figures = new Set(figuresOf(part));
   const rest = part.singles.filter((single) => !figures.has(single));
   return (
@@ -25,18 +26,18 @@ export function PartView({ part, nested = false }: { readonly part: ResultPart; 
       <Plots part={part} cursor={cursor} />
       {rest.length > 0 && <Singles quantities={rest} />}
       {part.lists.map((list) => (
-        <RecordListView key={list.pointer} list={list} />
+        <RecordListView key={list.pointer} list={list} level={nested ? 'h3' : 'h2'} />
       ))}
       {(part.columns.length > 0 || part.axis) && <ResultTable part={part} cursor={cursor} />}
       {part.parts.map((inner) => (
         <section key={inner.pointer} className="min-w-0">
-          <h3 className="mb-3 border-t border-rule pt-3 text-[14px] font-semibold">{inner.title}</h3>
+          <Heading className="mb-3 border-t border-rule pt-3 text-[14px] font-semibold">{inner.title}</Heading>
           <PartView part={inner} nested />
         </section>
       ))}
       {part.texts.map(({ title, pointer, text }) => (
         <section key={pointer} className="min-w-0">
-          <h3 className="mb-1.5 text-small font-[550]">{title}</h3>
+          <Heading className="mb-1.5 text-small font-[550]">{title}</Heading>
           <CodeBlock code={text} label={title} tall />
         </section>
       ))}

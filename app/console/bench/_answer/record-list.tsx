@@ -7,11 +7,11 @@ import type { RecordList, ResultPart } from './result-view';
 import { exactAt, showAt } from './show-value';
 
 /** Records that hold single values are a table; records that hold more open one by one. */
-export function RecordListView({ list }: { readonly list: RecordList }) {
+export function RecordListView({ list, level: Heading }: { readonly list: RecordList; readonly level: 'h2' | 'h3' }) {
   const flat = list.records.every((record) => record.columns.length + record.lists.length + record.parts.length + record.texts.length === 0);
   return (
     <section className="min-w-0">
-      <h3 className="mb-1 text-small font-[550]">{list.title}</h3>
+      <Heading className="mb-1 text-small font-[550]">{list.title}</Heading>
       {flat ? <RecordTable list={list} /> : list.records.map((record, index) => <RecordEntry key={record.pointer} record={record} open={index === 0} index={index} />)}
     </section>
   );

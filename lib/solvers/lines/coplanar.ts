@@ -80,6 +80,6 @@ const step = 1e-4;
 /** dL0/dn: strip and planes lose n on every side, and a plane below recedes. */
 function recession(width: number, gap: number, height: number, thickness: number, isBacked: boolean): number {
   const inductance = (n: number) => coplanarLine(thickened({ width: width - 2 * n, gap: gap + 2 * n, height: isBacked ? height + 2 * n : height, isBacked }, thickness - 2 * n), 1).impedance / speedOfLightMPerS;
-  const n = step * Math.min(width, gap, thickness);
+  const n = step * Math.min(width, gap, height, thickness);
   return (inductance(n) - inductance(-n)) / (2 * n);
 }

@@ -17,11 +17,9 @@ import { twistedPair } from './twisted-pair';
 import { twoWire } from './two-wire';
 import { wireOverPlane } from './wire-over-plane';
 
-const kinds = [rlgc, rlgcTable, lossless, datasheet, coaxial, twoWire, wireOverPlane, parallelPlate, twistedPair, microstrip, stripline] as const;
+const kinds = [rlgc, rlgcTable, lossless, datasheet, coaxial, twoWire, wireOverPlane, parallelPlate, twistedPair, microstrip, stripline, coplanar] as const;
 
 export const line = z
-  .discriminatedUnion('kind', [rlgc.schema, rlgcTable.schema, lossless.schema, datasheet.schema, coaxial.schema, twoWire.schema, wireOverPlane.schema, parallelPlate.schema, twistedPair.schema, microstrip.schema, stripline.schema])
-const kinds = [rlgc, rlgcTable, lossless, datasheet, coaxial, twoWire, wireOverPlane, parallelPlate, twistedPair, microstrip, stripline, coplanar] as const;
   .discriminatedUnion('kind', [rlgc.schema, rlgcTable.schema, lossless.schema, datasheet.schema, coaxial.schema, twoWire.schema, wireOverPlane.schema, parallelPlate.schema, twistedPair.schema, microstrip.schema, stripline.schema, coplanar.schema])
   .meta({ id: 'Line', title: 'Line', description: 'A uniform two-conductor line.' });
 

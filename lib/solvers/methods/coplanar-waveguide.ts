@@ -8,7 +8,7 @@
 import type { Method } from '../calculation';
 import { speedOfLightMPerS, vacuumPermeabilityHPerM } from '../constants';
 import type { LosslessPlanarLine } from '../lines/planar-constants';
-import { ratioOfIntegrals } from '../numeric/elliptic';
+import { logTanh, quarterPeriodRatio } from '../numeric/elliptic';
 
 const symbols = [
   { symbol: 'w', meaning: 'width of the strip', unit: 'm' },
@@ -83,37 +83,33 @@ export function coplanarWidening(width: number, given: number): number {
 }
 
 /**
- * Source, symbols, range and accuracy: the methods above. Throws nothing. The traps: sinh overflows, and k' = sqrt(1 - k^2) cancels; both are formed from
- * exponentials and from differences of the geometry: 1 - (sinh a/sinh c)^2 = sinh(c - a) sinh(c + a)/sinh^2 c, and the same over cosh for tanh.
+ * Source, symbols, range and accuracy: the methods above. Throws nothing. The traps: sinh overflows, and k' = sqrt(1 - k^2) cancels; so the logarithms of both
+ * are formed, and of differences of the geometry: 1 - (sinh a/sinh c)^2 = sinh(c - a) sinh(c + a)/sinh^2 c; for tanh the same, over cosh^2 a.
  */
 export function coplanarLine({ width, gap, height, isBacked }: CoplanarShape, relativePermittivity: number): LosslessPlanarLine {
   const outer = width + 2 * gap;
-  const open = ratioOfIntegrals(width / outer, (2 * Math.sqrt(gap) * Math.sqrt(width + gap)) / outer);
-  const a = (0.25 * Math.PI * width) / height;
-  const c = (0.25 * Math.PI * outer) / height;
-  const below = height === Infinity ? open : isBacked ? backedRatio(a, c) : substrateRatio(a, c);
+  const logOuter = Math.log(outer);
+  const open = quarterPeriodRatio(Math.log(width) - logOuter, Math.LN2 + 0.5 * (Math.log(gap) + Math.log(width + gap)) - logOuter);
+  const below = height === Infinity ? open : belowRatio((0.25 * Math.PI * width) / height, (0.25 * Math.PI * outer) / height, (0.5 * Math.PI * gap) / height, isBacked);
   const [air, field] = isBacked && height !== Infinity ? [open + below, below] : [2 * open, below];
   const effectivePermittivity = (air + (relativePermittivity - 1) * field) / air;
   const impedance = (vacuumPermeabilityHPerM * speedOfLightMPerS) / (2 * Math.sqrt(effectivePermittivity) * air);
   return { impedance, effectivePermittivity, share: (relativePermittivity * field) / air };
 }
 
-/** Below this the hyperbolic sines are their own arguments, to rounding. */
-function substrateRatio(a: number, c: number): number {
-  // sinh x = exp(x) (1 - exp(-2x))/2.
-  const sinh = (x: number) => -Math.expm1(-2 * x);
-  const k = (Math.exp(a - c) * sinh(a)) / sinh(c);
-  const complement = Math.sqrt(sinh(c - a) * sinh(c + a)) / sinh(c);
-  return k === 0 ? (0.5 * Math.PI) / (Math.log(4) + c - a - Math.log(sinh(a) / sinh(c))) : ratioOfIntegrals(k, complement);
+/** K/K' of k1, or of k2 with a plane below; a, c and their difference in the arguments of the hyperbolic functions. */
+function belowRatio(a: number, c: number, difference: number, isBacked: boolean): number {
+  const complement = 0.5 * (logSinh(difference) + logSinh(a + c)) - logSinh(c);
+  if (!isBacked) return quarterPeriodRatio(logSinh(a) - logSinh(c), complement);
+  return quarterPeriodRatio(logTanh(a) - logTanh(c), complement - logCosh(a));
 }
 
-function backedRatio(a: number, c: number): number {
-  const sinh = (x: number) => -Math.expm1(-2 * x);
-  const cosh = (x: number) => 1 + Math.exp(-2 * x);
-  const k = Math.tanh(a) / Math.tanh(c);
-  // 1 - tanh^2 a/tanh^2 c = sinh(c - a) sinh(c + a)/(sinh^2 c cosh^2 a): exp(2c - 2c - 2a) is left.
-  const complement = (2 * Math.exp(-a) * Math.sqrt(sinh(c - a) * sinh(c + a))) / (sinh(c) * cosh(a));
-  // K(k) = ln(4/k') and K(k') = pi/2 where k' vanishes.
-  const logarithm = Math.log(2) + a - 0.5 * Math.log(sinh(c - a) * sinh(c + a)) + Math.log(sinh(c) * cosh(a));
-  return complement < 1e-8 ? logarithm / (0.5 * Math.PI) : ratioOfIntegrals(k, complement);
+/** ln(2 sinh x), x > 0; its factor of 2 drops out of every ratio here. */
+function logSinh(x: number): number {
+  return x + Math.log(-Math.expm1(-2 * x));
+}
+
+/** ln cosh x. */
+function logCosh(x: number): number {
+  return x + Math.log1p(Math.exp(-2 * x)) - Math.LN2;
 }

@@ -1,4 +1,3 @@
-<<<<<<< HEAD
 /** Complete elliptic integrals of the first kind, as the ratio that capacitances are made of. */
 
 /** Below exp of this a modulus is so small that its square is lost beside 1. */
@@ -35,20 +34,4 @@ export function logTanh(x: number): number {
 /** ln sech x, x >= 0, without overflow. */
 export function logSech(x: number): number {
   return Math.LN2 - x - Math.log1p(Math.exp(-2 * x));
-=======
-/** Complete elliptic integrals of the first kind, by the arithmetic-geometric mean. */
-
-/** Source: Abramowitz and Stegun 17.6. Range: positive numbers. Accuracy: 2 units of rounding. Each step doubles the digits, so twelve are plenty. */
-function mean(a: number, b: number): number {
-  for (let step = 0; step < 40 && Math.abs(a - b) > 1e-16 * a; step++) [a, b] = [0.5 * (a + b), Math.sqrt(a) * Math.sqrt(b)];
-  return a;
-}
-
-/**
- * K(k)/K(k'). Source: Abramowitz and Stegun 17.3, K(k) = pi / (2 agm(1, k')). Range: 0 < k, k' < 1, down to the smallest numbers. Accuracy: a few units
- * of rounding. Throws nothing. The trap: k' = sqrt(1 - k^2) cancels near 1, so whoever knows both from the geometry gives both.
- */
-export function ratioOfIntegrals(k: number, complement: number): number {
-  return mean(1, k) / mean(1, complement);
->>>>>>> 7344cb1 (Striplines of any thickness and offset, coplanar lines with and without a plane; what the contract tests found)
 }

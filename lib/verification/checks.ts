@@ -11,6 +11,7 @@ import networks from '../../tests/reference/networks.json';
 import drivenLines from '../../tests/reference/driven-lines.json';
 import reflection from '../../tests/reference/reflection.json';
 import round from '../../tests/reference/round.json';
+import stripline from '../../tests/reference/stripline.json';
 import wires from '../../tests/reference/wires.json';
 import striplines from '../../tests/reference/striplines.json';
 import telegrapher from '../../tests/reference/telegrapher.json';
@@ -40,7 +41,7 @@ export interface CheckFile {
   readonly checks: readonly Check[];
 }
 
-export const checkFiles: readonly CheckFile[] = [telegrapher, networks, reflection, drivenLines, matching, given, round, wires, lumped, microstrip, striplines] as unknown as readonly CheckFile[];
+export const checkFiles: readonly CheckFile[] = [telegrapher, networks, reflection, drivenLines, matching, given, round, wires, lumped, microstrip, striplines, stripline] as unknown as readonly CheckFile[];
 
 /** A value as the engine computes it now. */
 export type ComputedValue = number | boolean | string | null | { readonly re: number; readonly im: number };

@@ -39,7 +39,7 @@ export interface StripCapacitance {
 
 /**
  * Source: Schwarz-Christoffel formula (Churchill, Complex Variables; Nehari, Conformal Mapping, chapter 5; from memory); elliptic for a strip in the
- * middle, as Bates 1956 has it. Range: any rectangle between the planes. Accuracy: 1e-11. Throws RangeError should the side lengths not be met in
+ * middle, as Bates 1956 has it. Range: any rectangle between the planes. Accuracy: 1e-12. Throws RangeError should the side lengths not be met in
  * `mostSteps`, which no dimension is known to bring about. The trap: the points crowd by exp(pi w/g); they are kept as logarithms of their distances.
  */
 export function thickStripCapacitance(strip: StripBetweenPlanes, from?: Prevertices): StripCapacitance {

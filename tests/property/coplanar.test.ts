@@ -45,6 +45,21 @@ describe('a coplanar line', () => {
       }),
     );
   });
+
+  it('loses what its permittivity has a share in: tan d eps_r d eps_eff/d eps_r over eps_eff', () => {
+    const calculation = findCalculation('lines', 'primary-constants')!;
+    const at = (er: number, more: object) => {
+      const { result } = calculation.solve(calculation.input.parse({ line: { kind: 'coplanar', width_m: 3e-4, gap_m: 2e-4, conductor: 'perfect', dielectric: { relative_permittivity: er, loss_tangent: 0.01 }, ...more }, frequency_hz: 1e9 }));
+      const { conductance_s_per_m: G, capacitance_f_per_m: C, effective_permittivity: effective } = result as Record<string, number[]>;
+      return { tangent: G[0] / (2 * Math.PI * 1e9 * C[0]), effective: effective[0] };
+    };
+    run(
+      fc.property(fc.double({ min: 1, max: 20, noNaN: true }), fc.constantFrom({}, { height_m: 3e-4 }, { height_m: 3e-4, backed: true }, { height_m: 3e-4, thickness_m: 1e-5 }), (er, more) => {
+        const slope = at(er + 1, more).effective - at(er, more).effective;
+        expect(at(er, more).tangent / ((0.01 * er * slope) / at(er, more).effective)).toBeCloseTo(1, 10);
+      }),
+    );
+  });
 });
 
 describe('every accepted coplanar line', () => {

@@ -144,6 +144,13 @@ def coplanar_checks():
         given = {"line": line("coplanar", er, width_m=w, gap_m=s), "frequency_hz": 1e9}
         yield check("lines/secondary-constants", f"coplanar line on a half space, w/s = {w / s:g}", source, given, {"/characteristic_impedance_ohm": mp.mpc(z), "/phase_velocity_m_per_s": LIGHT / mp.sqrt(effective)}, 1e-12)
         yield check("lines/primary-constants", f"coplanar line on a half space, w/s = {w / s:g}", source, given, {"/effective_permittivity": effective}, 1e-12)
+    # A half space is half of the field: C = eps0 (1 + er (1 - j tan d)) c0/2, so G/(omega C) = er tan d/(1 + er).
+    for er, tangent in ((4.3, 0.02), (12.9, 0.002)):
+        k = exact(3e-4) / exact(7e-4)
+        capacitance = (1 + exact(er)) / (MU0 * LIGHT**2) * 2 * ratio(k, mp.sqrt(1 - k * k))
+        lossy = {"kind": "coplanar", "width_m": 3e-4, "gap_m": 2e-4, "conductor": "perfect", "dielectric": {"relative_permittivity": er, "loss_tangent": tangent}}
+        given = {"line": lossy, "frequency_hz": 1e9}
+        yield check("lines/primary-constants", f"loss of a substrate without end, permittivity {er}", source, given, {"/conductance_s_per_m": 2 * mp.pi * 10**9 * capacitance * exact(er) * exact(tangent) / (1 + exact(er)), "/capacitance_f_per_m": capacitance}, 1e-12)
     method = "field in the domain of wave numbers, the gap's field in Chebyshev polynomials (Itoh, Numerical Techniques for Microwave Passive Structures, 1989, chapter 5, from memory), good to 1e-4; against Ghione and Naldi's stated accuracy"
     for w_s in (0.5, 1, 3):
         for er in (2.2, 4.3, 9.8):

@@ -94,7 +94,7 @@ export function coplanarLine({ width, gap, height, isBacked }: CoplanarShape, re
   const [air, field] = isBacked && height !== Infinity ? [open + below, below] : [2 * open, below];
   const effectivePermittivity = (air + (relativePermittivity - 1) * field) / air;
   const impedance = (vacuumPermeabilityHPerM * speedOfLightMPerS) / (2 * Math.sqrt(effectivePermittivity) * air);
-  return { impedance, effectivePermittivity, share: (relativePermittivity * field) / air };
+  return { impedance, effectivePermittivity, share: field / air };
 }
 
 /** K/K' of k1, or of k2 with a plane below; a, c and their difference in the arguments of the hyperbolic functions. */

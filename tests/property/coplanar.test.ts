@@ -2,6 +2,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { ImpossibleInput } from '@/lib/solvers/errors';
+import { line as lineSchema, lineOverFrequency } from '@/lib/solvers/lines/line';
 import { findCalculation } from '@/lib/solvers/registry';
 
 const run = <Arguments>(property: fc.IProperty<Arguments>, runs = 100) => fc.assert(property, { numRuns: runs, seed: 20261201 });
@@ -57,6 +58,23 @@ describe('a coplanar line', () => {
       fc.property(fc.double({ min: 1, max: 20, noNaN: true }), fc.constantFrom({}, { height_m: 3e-4 }, { height_m: 3e-4, backed: true }, { height_m: 3e-4, thickness_m: 1e-5 }), (er, more) => {
         const slope = at(er + 1, more).effective - at(er, more).effective;
         expect(at(er, more).tangent / ((0.01 * er * slope) / at(er, more).effective)).toBeCloseTo(1, 10);
+      }),
+    );
+  });
+});
+
+describe('the loss of a coplanar line', () => {
+  const constants = (line: object, frequency = 1e9) => lineOverFrequency(lineSchema.parse({ kind: 'coplanar', gap_m: 1e-3, conductor: 'perfect', ...line }), Float64Array.of(frequency)).constants;
+
+  it('is that of its dielectric: omega tan d times what the capacitance grows by in proportion to the permittivity, and never more than that of a filled line', () => {
+    run(
+      fc.property(ratio, decades(-1, 1), decades(0.1, 2), fc.constantFrom({}, { height: true }, { height: true, backed: true }), (w, h, er, { height, ...below }: { height?: boolean; backed?: boolean }) => {
+        const line = { width_m: w * 1e-3, ...(height && { height_m: h * 1e-3 }), ...below };
+        const at = (relative_permittivity: number) => constants({ ...line, dielectric: { relative_permittivity, loss_tangent: 0.01 } });
+        const { conductance, capacitance } = at(er);
+        const growth = (at(er * 1.001).capacitance[0] - at(er * 0.999).capacitance[0]) / 0.002;
+        expect(conductance[0] / (2 * Math.PI * 1e9 * 0.01 * growth)).toBeCloseTo(1, 8);
+        expect(conductance[0]).toBeLessThan(2 * Math.PI * 1e9 * 0.01 * capacitance[0]);
       }),
     );
   });

@@ -1,5 +1,6 @@
 /** Every calculation of the service. This list is the only place that knows them all. */
 import type { Calculation, Method } from './calculation';
+import { dimension } from './calculations/lines/dimension';
 import { electricalLength } from './calculations/lines/electrical-length';
 import { fromSecondary } from './calculations/lines/from-secondary';
 import { primaryConstants } from './calculations/lines/primary-constants';
@@ -12,7 +13,7 @@ import { powerBudget } from './calculations/terminations/power-budget';
 import { reflection } from './calculations/terminations/reflection';
 import { standingWave } from './calculations/terminations/standing-wave';
 
-export const calculations: readonly Calculation[] = [primaryConstants, secondaryConstants, fromSecondary, inputImpedance, reflection, standingWave, powerBudget, matching, cascade, convert, electricalLength];
+export const calculations: readonly Calculation[] = [primaryConstants, secondaryConstants, fromSecondary, inputImpedance, reflection, standingWave, powerBudget, matching, cascade, convert, electricalLength, dimension];
 
 export function findCalculation(group: string, id: string): Calculation | undefined {
   return calculations.find((calculation) => calculation.group === group && calculation.id === id);

@@ -3,6 +3,7 @@
  * tests/reference, each file made by the generator beside it; the tests and the public page read the same.
  */
 import { findCalculation } from '../solvers/registry';
+import dimension from '../../tests/reference/dimension.json';
 import matching from '../../tests/reference/matching.json';
 import given from '../../tests/reference/given.json';
 import lumped from '../../tests/reference/lumped.json';
@@ -41,7 +42,7 @@ export interface CheckFile {
   readonly checks: readonly Check[];
 }
 
-export const checkFiles: readonly CheckFile[] = [telegrapher, networks, reflection, drivenLines, matching, given, round, wires, lumped, microstrip, striplines, stripline] as unknown as readonly CheckFile[];
+export const checkFiles: readonly CheckFile[] = [telegrapher, networks, reflection, drivenLines, matching, given, round, wires, lumped, microstrip, striplines, stripline, dimension] as unknown as readonly CheckFile[];
 
 /** A value as the engine computes it now. */
 export type ComputedValue = number | boolean | string | null | { readonly re: number; readonly im: number };

@@ -7,7 +7,7 @@ import { widebandDebye } from '../methods/permittivity';
 import { hammerstadRoughness, incrementalInductance } from '../methods/planar-conductor';
 import { conductor, conductorAt, temperature } from '../nouns/conductor';
 import { dielectric, dielectricOver } from '../nouns/dielectric';
-import { conductorIssues, diameter as dimension, leastM, mostM } from './dimensions';
+import { conductorIssues, diameter as dimension, leastM, mostM, optionalDiameter } from './dimensions';
 import { defineLineKind } from './line-constants';
 import { planarConstants } from './planar-constants';
 
@@ -16,7 +16,7 @@ const schema = z
     kind: z.literal('coplanar').meta({ title: 'Kind', description: 'A strip between two planes on one surface.', examples: ['coplanar'] }),
     width_m: dimension('Width', 'Width of the strip.', 6e-4),
     gap_m: dimension('Gap', 'From the strip to the plane on either side.', 2e-4),
-    height_m: dimension('Height', 'Height of the substrate; without end when left out.', 1.5e-3).optional(),
+    height_m: optionalDiameter('Height', 'Height of the substrate; without end when left out.', 1.5e-3),
     thickness_m: z.number().min(0).max(mostM).default(0).meta({ title: 'Thickness', description: 'Thickness of strip and planes; 0 leaves conductor loss out.', examples: [1.8e-5], 'x-unit': 'm' }),
     backed: z.boolean().default(false).meta({ title: 'Backed', description: 'Whether a ground plane lies below the substrate.', examples: [true] }),
     conductor: conductor.default('copper').meta({ title: 'Conductor', description: 'What strip and planes are made of.', examples: ['copper'] }),

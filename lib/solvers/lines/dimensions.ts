@@ -7,6 +7,8 @@ export const [leastM, mostM] = [1e-10, 1e3];
 
 export const diameter = (title: string, description: string, example: number) => z.number().min(leastM).max(mostM).meta({ title, description, examples: [example], 'x-unit': 'm' });
 
+export const optionalDiameter = (title: string, description: string, example: number) => diameter(title, description, example).optional().meta({ title, description, examples: [example], 'x-unit': 'm' });
+
 type Context = z.core.$RefinementCtx;
 
 /** `larger` must be more than `factor` times `smaller`. */

@@ -56,16 +56,16 @@ export function sensitivityAt(impedance: PartialFunction, x: number, greatest: n
   for (let shrinking = 0; shrinking < mostShrinkings; shrinking++, step /= 2) {
     if (x + step === x) break;
     // Half the way to the end, since an impedance may leave it like a square root.
-    if (impedance(x + 2 * step) !== null && impedance(x - 2 * step) !== null) return derivative(impedance, x, step);
+    if (impedance.isDefined(x + 2 * step) && impedance.isDefined(x - 2 * step)) return derivative((each) => impedance.valueAt(each), x, step);
   }
   return oneSided(impedance, x, firstStep * 1e-3 * (Math.abs(x) || greatest * smallestShare));
 }
 
 /** (-3 f(x) + 4 f(x + h) - f(x + 2h)) / 2h, to whichever side has values. */
 function oneSided(f: PartialFunction, x: number, size: number): number | null {
-  const here = f(x);
+  const here = f.valueAt(x);
   for (const h of [size, -size]) {
-    const [near, far] = [f(x + h), f(x + 2 * h)];
+    const [near, far] = [f.valueAt(x + h), f.valueAt(x + 2 * h)];
     if (here !== null && near !== null && far !== null) return (4 * near - far - 3 * here) / (2 * h);
   }
   return null;

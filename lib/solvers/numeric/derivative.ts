@@ -1,6 +1,6 @@
 /** The derivative of a function that can only be evaluated. */
 
-const rounds = 12;
+const rounds = 8;
 const shrink = 1.4;
 /** A difference that has grown by this much since the best one is rounding alone. */
 const spoiled = 2;

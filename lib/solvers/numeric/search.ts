@@ -10,7 +10,11 @@
  */
 import { bracketedRoot, type Root, type Sample } from './roots';
 
-export type PartialFunction = (x: number) => number | null;
+export interface PartialFunction {
+  /** Whether it can have a value at all; cheap. */
+  isDefined(x: number): boolean;
+  valueAt(x: number): number | null;
+}
 
 export interface Search {
   /** By x. */
@@ -26,6 +30,8 @@ export interface Search {
 const mostRoots = 8;
 const mostPeaks = 8;
 const mostHalvings = 60;
+/** Where only the function itself knows its end, which may cost much. */
+const mostCostlyHalvings = 20;
 const goldenSections = 60;
 const goldenRatio = (Math.sqrt(5) - 1) / 2;
 
@@ -52,7 +58,7 @@ function stretchesOf(f: PartialFunction, points: Float64Array): Sample[][] {
   const stretches: Sample[][] = [];
   let open: Sample[] | null = null;
   points.forEach((x, index) => {
-    const value = f(x);
+    const value = f.valueAt(x);
     if (value === null) {
       if (open) open.push(...endOf(f, open[open.length - 1], x));
       open = null;
@@ -69,16 +75,32 @@ function stretchesOf(f: PartialFunction, points: Float64Array): Sample[][] {
 
 /** The sample farthest from `inside` on the way to `outside` that has a value; none where that is `inside` itself. */
 function endOf(f: PartialFunction, inside: Sample, outside: number): Sample[] {
+  if (f.isDefined(outside)) return costlyEnd(f, inside, outside);
+  const [x] = halved(inside.x, outside, mostHalvings, (each) => f.isDefined(each));
+  if (x === inside.x) return [];
+  const value = f.valueAt(x);
+  return value === null ? costlyEnd(f, inside, x) : [{ x, value }];
+}
+
+function costlyEnd(f: PartialFunction, inside: Sample, outside: number): Sample[] {
   let end = inside;
-  let beyond = outside;
-  for (let halving = 0; halving < mostHalvings; halving++) {
-    const x = end.x + (beyond - end.x) / 2;
-    if (x === end.x || x === beyond) break;
-    const value = f(x);
-    if (value === null) beyond = x;
-    else end = { x, value };
-  }
+  halved(inside.x, outside, mostCostlyHalvings, (x) => {
+    const value = f.valueAt(x);
+    if (value !== null) end = { x, value };
+    return value !== null;
+  });
   return end === inside ? [] : [end];
+}
+
+/** Brings together what holds and what does not; to neighbouring numbers where the halvings suffice. */
+function halved(holds: number, fails: number, most: number, test: (x: number) => boolean): [holds: number, fails: number] {
+  for (let halving = 0; halving < most; halving++) {
+    const x = holds + (fails - holds) / 2;
+    if (x === holds || x === fails) break;
+    if (test(x)) holds = x;
+    else fails = x;
+  }
+  return [holds, fails];
 }
 
 function withPeaks(wanted: number, f: PartialFunction, stretch: readonly Sample[]): Sample[] {
@@ -102,7 +124,7 @@ function topOf(f: PartialFunction, sign: 1 | -1, from: number, to: number): Samp
   let [a, b] = [from, to];
   let best: Sample | null = null;
   const look = (x: number): number => {
-    const value = f(x);
+    const value = f.valueAt(x);
     if (value === null) return -Infinity;
     if (!best || sign * value > sign * best.value) best = { x, value };
     return sign * value;
@@ -125,7 +147,7 @@ function topOf(f: PartialFunction, sign: 1 | -1, from: number, to: number): Samp
 
 function rootsIn(wanted: number, f: PartialFunction, stretch: readonly Sample[]): Root[] {
   const difference = (x: number) => {
-    const value = f(x);
+    const value = f.valueAt(x);
     return value === null ? null : value - wanted;
   };
   return stretch.flatMap((sample, index): Root[] => {

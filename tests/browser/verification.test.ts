@@ -68,12 +68,19 @@ describe('a reader of the verification page', () => {
 });
 
 describe('a reader of the methods', () => {
-  it('comes from the list to a method, and from there to its checks', async () => {
+  it('comes from the list to formulas that are typeset and stand as MathML for those who hear them', async () => {
     const visitor = await newVisitor();
     const { page, open } = visitor;
     await open('/methods');
     await page.getByRole('link', { name: 'Propagation constant and characteristic impedance from R, L, G, C' }).click();
     await page.waitForURL('**/methods/telegrapher-propagation');
+    const formulas = page.getByRole('region', { name: 'Formulas' });
+    expect(await formulas.locator('math').count()).toBe(4);
+    expect(await formulas.locator('math msqrt').count()).toBe(2);
+    // Set in the typeface that comes with the app.
+    expect(await formulas.locator('.katex-html').first().evaluate((element) => getComputedStyle(element).fontFamily)).toContain('KaTeX_Main');
+    await page.evaluate(() => document.fonts.ready);
+    expect(await page.evaluate(() => [...document.fonts].some(({ family, status }) => family.includes('KaTeX_Main') && status === 'loaded'))).toBe(true);
     expect(visitor.elsewhere).toEqual([]);
     await page.getByRole('link', { name: /^See the \d+ checks$/ }).click();
     await page.waitForURL('**/verification?method=telegrapher-propagation');

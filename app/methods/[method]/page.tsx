@@ -13,6 +13,7 @@ import { verificationRecord } from '@/lib/verification/record';
 import { Formula, Symbol } from '../_method/formula';
 import { Measured } from '../_method/measured';
 import { calculationsWith, lineKindsWith } from '../_method/where-used';
+import 'katex/dist/katex.min.css';
 import '../method.css';
 
 interface MethodPageProps {

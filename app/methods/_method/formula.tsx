@@ -6,7 +6,7 @@ export function Formula({ latex, label }: { readonly latex: string; readonly lab
     <div role="group" aria-label={label} className="flex flex-wrap items-baseline gap-x-12">
       {partsOf(latex).map((part) => (
         // What scrolls must be reachable by keyboard.
-        <div key={part} tabIndex={0} className="formula" dangerouslySetInnerHTML={{ __html: typeset(part) }} />
+        <div key={part} tabIndex={0} className="formula" dangerouslySetInnerHTML={{ __html: typeset(part, { display: true }) }} />
       ))}
     </div>
   );

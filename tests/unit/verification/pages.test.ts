@@ -1,6 +1,6 @@
 /** What the pages of the record and of the methods make of it: filters in the address, digits side by side, formulas set. */
 import { describe, expect, it } from 'vitest';
-import { partsOf } from '@/app/methods/_method/typeset';
+import { partsOf, typeset } from '@/app/methods/_method/typeset';
 import { methodsByShelf } from '@/app/methods/_method/where-used';
 import { brief, computedLines, digitsBeside, percent, publishedLines } from '@/app/verification/_record/digits';
 import { applyFilters, everything, isNarrowed, readFilters, verificationHref } from '@/app/verification/_record/filters';
@@ -65,6 +65,15 @@ describe('the digits', () => {
   it('of a difference are few', () => {
     expect([0, 1.234e-16, 0.00412, 0.05, 12345].map((value) => brief(value))).toEqual(['0', '1.2e-16', '0.0041', '0.05', '1.2e+4']);
     expect([0, 1e-9, 0.83, Infinity].map(percent)).toEqual(['0\u00a0%', '< 0.01\u00a0%', '83\u00a0%', 'not met']);
+  });
+});
+
+describe.each(methods.map((method) => [method.id, method] as const))('the method %s', (_, { formulas, symbols }) => {
+  it('has formulas and symbols that can be set, without a warning', () => {
+    for (const latex of [...formulas.flatMap(partsOf), ...symbols.map(({ symbol }) => symbol)]) {
+      const html = typeset(latex, { display: true, strict: true });
+      expect(html).toContain('<math');
+    }
   });
 });
 

@@ -61,7 +61,7 @@ describe('a conversion', () => {
         const magnified = 1 + largest(there);
         for (const name of names.s) expect(apart(entry(back[name]), s[name])).toBeLessThanOrEqual(1e-13 * magnified * magnified);
       }),
-      1000,
+      400,
     );
   });
 
@@ -76,7 +76,7 @@ describe('a conversion', () => {
         const magnified = (1 + largest(between)) ** 2 * (1 + largest(once));
         for (const name of names[to]) expect(apart(entry(once[name]), entry(twice[name]))).toBeLessThanOrEqual(1e-13 * magnified * (1 + Math.hypot(once[name].re[0]!, once[name].im[0]!)));
       }),
-      1000,
+      400,
     );
   });
 
@@ -98,7 +98,7 @@ describe('a conversion', () => {
           expect(apart(entry(on[name]), entry(atOnce[name]))).toBeLessThanOrEqual(1e-13 * magnified);
         }
       }),
-      1000,
+      400,
     );
   });
 
@@ -116,6 +116,117 @@ describe('a conversion', () => {
         const columns = Object.fromEntries(Object.entries(s).map(([name, { re, im }]) => [name, { re: [0, re], im: [0, im] }]));
         const sweep = converted({ from: 's', to: 'z', values: columns, reference_impedance_ohm: refer, frequency_hz: [1e6, 2e6] });
         for (const name of names.z) expect(entry(sweep[name], 1)).toEqual(entry(z[name]));
+      }),
+    );
+  });
+});
+
+interface CascadeResult {
+  readonly abcd: Values;
+  readonly s: Values;
+  readonly z: Values;
+  readonly y: Values;
+  readonly t: Values;
+  readonly group_delay_s: (number | null)[];
+  readonly rollett_stability_factor: (number | null)[];
+  readonly stability_measure: (number | null)[];
+  readonly reciprocal: boolean;
+  readonly passive: boolean;
+}
+const cascaded = (input: object) => solve('cascade', { include: kinds, ...input }).result as unknown as CascadeResult;
+const given = (representation: Kind, values: object, reference_impedance_ohm?: unknown) => ({ kind: 'two_port', representation, values, ...((representation === 's' || representation === 't') && { reference_impedance_ohm }) });
+
+const decades = (low: number, high: number) => fc.double({ min: low, max: high, noNaN: true }).map((exponent) => 10 ** exponent);
+const line = fc.record({ kind: fc.constant('rlgc'), resistance_ohm_per_m: decades(-4, 2), inductance_h_per_m: decades(-7.5, -6), conductance_s_per_m: decades(-9, -3), capacitance_f_per_m: decades(-11, -9.5) });
+const part = fc.oneof(
+  fc.record({ kind: fc.constant('line'), line, length_m: decades(-3, -0.5) }),
+  fc.record({ kind: fc.constantFrom('series', 'shunt'), impedance_ohm: fc.record({ re: decades(0, 3), im: fc.double({ min: -300, max: 300, noNaN: true }) }) }),
+  fc.record({ kind: fc.constant('transformer'), turns_ratio: decades(-0.5, 0.5) }),
+);
+const parts = fc.array(part, { minLength: 1, maxLength: 4 });
+const frequency = decades(6, 9);
+
+function areClose(one: Values, other: Values, within: number): void {
+  for (const name of Object.keys(one)) expect(apart(entry(one[name]), entry(other[name])), name).toBeLessThanOrEqual(within);
+}
+
+describe('a cascade with two-ports by their matrices', () => {
+  it('of one alone is that one, in every representation', () => {
+    run(
+      fc.property(scattering, references, references, fc.constantFrom(...kinds), (s, own, outer, kind) => {
+        const values = converted({ from: 's', to: kind, values: s, reference_impedance_ohm: own });
+        if (!exists(values)) return;
+        const wanted = converted({ from: kind, to: 's', values: asGiven(values), reference_impedance_ohm: own, to_reference_impedance_ohm: outer });
+        if (!exists(wanted)) return;
+        const got = cascaded({ elements: [given(kind, asGiven(values), own)], frequency_hz: 1e9, reference_impedance_ohm: outer });
+        areClose(got.s, wanted, 1e-13 * (1 + largest(wanted)) ** 2);
+      }),
+      400,
+    );
+  });
+
+  it('is the whole, whichever part is given by its matrix', () => {
+    run(
+      fc.property(parts, parts, parts, frequency, references, fc.constantFrom(...kinds), (before, middle, after, frequency_hz, refer, kind) => {
+        const whole = cascaded({ elements: [...before, ...middle, ...after], frequency_hz, reference_impedance_ohm: refer });
+        const matrix = cascaded({ elements: middle, frequency_hz, reference_impedance_ohm: 75 })[kind];
+        if (!exists(matrix)) return;
+        const joined = cascaded({ elements: [...before, given(kind, asGiven(matrix), 75), ...after], frequency_hz, reference_impedance_ohm: refer });
+        // Z and Y of what hardly hinders or hardly passes are large, and their differences are what counts.
+        const magnified = kind === 's' ? 1 : 1 + largest(matrix);
+        areClose(joined.s, whole.s, 1e-13 * magnified * magnified);
+        expect(joined.passive).toBe(true);
+      }),
+    );
+  });
+
+  it('is the same nested as flat, and repeated as written out', () => {
+    run(
+      fc.property(parts, scattering, fc.integer({ min: 1, max: 9 }), fc.integer({ min: 1, max: 4 }), frequency, (some, s, times, more, frequency_hz) => {
+        const inner = [...some, given('s', s, 50)];
+        const nested = cascaded({ elements: [{ kind: 'cascade', elements: [{ kind: 'cascade', elements: inner, repeat: times }, some[0]], repeat: more }], frequency_hz });
+        const flat = cascaded({ elements: Array.from({ length: more }, () => [...Array.from({ length: times }, () => inner).flat(), some[0]]).flat(), frequency_hz });
+        for (const name of names.s) {
+          const [one, other] = [entry(nested.s[name]), entry(flat.s[name])];
+          expect(apart(one, other)).toBeLessThanOrEqual(1e-10 * (Math.hypot(one.re, one.im) + (name === 's11' || name === 's22' ? 1 + largest(flat.s) : 0)));
+        }
+        expect(nested.reciprocal).toBe(flat.reciprocal);
+      }),
+    );
+  });
+
+  it('passes both ways what its parts pass, and keeps K whatever the references', () => {
+    run(
+      fc.property(scattering, part, references, references, frequency, (s, other, one, two, frequency_hz) => {
+        const elements = [given('s', s, 50), other, given('s', s, 75)];
+        const first = cascaded({ elements, frequency_hz, reference_impedance_ohm: one });
+        const second = cascaded({ elements, frequency_hz, reference_impedance_ohm: two });
+        if (!exists(first.s) || !exists(second.s)) return;
+        // S12/S21 is det ABCD, a product of those of the parts.
+        const times = (p: Parts, q: Parts): Parts => ({ re: p.re * q.re - p.im * q.im, im: p.re * q.im + p.im * q.re });
+        const left = times(entry(first.s.s12), times(s.s21, s.s21));
+        const right = times(entry(first.s.s21), times(s.s12, s.s12));
+        expect(apart(left, right)).toBeLessThanOrEqual(1e-12 * Math.hypot(left.re, left.im));
+        const [k, again] = [first.rollett_stability_factor[0], second.rollett_stability_factor[0]];
+        if (k !== null && again !== null) expect(Math.abs(k - again)).toBeLessThanOrEqual(1e-9 * (1 + Math.abs(k)));
+        const [mu, other_mu] = [first.stability_measure[0], second.stability_measure[0]];
+        if (mu !== null && other_mu !== null && Math.abs(mu - 1) > 1e-6) expect(mu > 1).toBe(other_mu > 1);
+      }),
+    );
+  });
+
+  it('has the delay of the line whose columns it is given, to the second order of the step', () => {
+    run(
+      fc.property(line, decades(-2, 0), fc.constantFrom(...kinds), references, (given_line, length_m, kind, refer) => {
+        const elements = [{ kind: 'line', line: given_line, length_m }];
+        const turns = 2 * Math.PI * length_m * Math.sqrt(given_line.inductance_h_per_m * given_line.capacitance_f_per_m);
+        const centre = 0.8 / turns;
+        const frequency_hz = [0.999, 1, 1.0012].map((each) => each * centre);
+        const exact = cascaded({ elements, frequency_hz, reference_impedance_ohm: refer });
+        const matrix = exact[kind];
+        if (!Object.values(matrix).every(({ re }) => re.every((each) => each !== null && Math.abs(each) < 1e6))) return;
+        const columns = cascaded({ elements: [given(kind, matrix, refer)], frequency_hz, reference_impedance_ohm: refer });
+        expect(Math.abs(columns.group_delay_s[1]! / exact.group_delay_s[1]! - 1)).toBeLessThanOrEqual(1e-4);
       }),
     );
   });
@@ -146,7 +257,24 @@ describe('every accepted input', () => {
       fc.property(anyMatrix, fc.constantFrom(...kinds), anyReferences, anyReferences, ({ kind, values }, to, refer, wanted) =>
         holdsOnlyFiniteNumbers('convert', { from: kind, to, values, reference_impedance_ohm: refer, to_reference_impedance_ohm: wanted }),
       ),
-      4000,
+      2000,
+    );
+  });
+
+  const extreme = (high: number) => fc.oneof(fc.constantFrom(0, Number.MIN_VALUE, 1e-300, 1e-30, high), fc.double({ min: 0, max: high, noNaN: true }));
+  const anyLeaf = fc.oneof(
+    { weight: 3, arbitrary: fc.tuple(anyMatrix, anyReferences).map(([{ kind, values }, refer]) => given(kind, values, refer)) },
+    { weight: 1, arbitrary: fc.tuple(fc.constantFrom('series', 'shunt'), fc.constantFrom('series', 'parallel'), extreme(1e12), extreme(1e3)).map(([kind, connection, resistance_ohm, capacitance_f]) => ({ kind, connection, resistance_ohm, capacitance_f })) },
+    { weight: 1, arbitrary: fc.record({ kind: fc.constant('line'), line: fc.record({ kind: fc.constant('rlgc'), resistance_ohm_per_m: extreme(1e9), inductance_h_per_m: extreme(1e3), conductance_s_per_m: extreme(1e9), capacitance_f_per_m: extreme(1e3) }), length_m: extreme(1e9) }) },
+  );
+  const anyChain = fc.array(fc.oneof({ weight: 3, arbitrary: anyLeaf }, { weight: 1, arbitrary: fc.tuple(fc.array(anyLeaf, { minLength: 1, maxLength: 3 }), fc.constantFrom(1, 2, 7, 1000)).map(([elements, repeat]) => ({ kind: 'cascade', elements, repeat })) }), { minLength: 1, maxLength: 4 });
+
+  it('to cascade gives finite numbers or null with a warning', () => {
+    run(
+      fc.property(anyChain, anyReferences, fc.constantFrom('open', 'short', 50, { re: -1e12, im: 3 }), fc.array(extreme(1e15), { minLength: 1, maxLength: 3 }), (elements, refer, termination, frequency_hz) =>
+        holdsOnlyFiniteNumbers('cascade', { elements, frequency_hz, reference_impedance_ohm: refer, termination, include: kinds }),
+      ),
+      2000,
     );
   });
 });

@@ -13,23 +13,32 @@ const numbers = fc.oneof(
   { weight: 1, arbitrary: fc.double({ min: -1e15, max: 1e15, noNaN: true }) },
 );
 
+/** A schema that holds itself is entered twice at most. */
+const mostRounds = 2;
+
 /** Bodies that the schema accepts, as far as a schema can say; `root` is where its references point into. */
 export function rightBodies(schema: Json, root: Json = document): fc.Arbitrary<Json> {
-  return fromSchema(schema, root);
+  const bodies = fromSchema(schema, root, []);
+  if (!bodies) throw new Error('the schema holds itself without an end');
+  return bodies;
 }
 
-function fromSchema(schema: Json, root: Json): fc.Arbitrary<Json> {
-  if (schema.$ref) return fromSchema(resolve(schema.$ref, root), root);
+/** Undefined where a schema would have to hold itself once more; `open` are the references on the way here. */
+function fromSchema(schema: Json, root: Json, open: readonly string[]): fc.Arbitrary<Json> | undefined {
+  if (schema.$ref) {
+    const rounds = open.filter((each) => each === schema.$ref).length;
+    return rounds < mostRounds ? fromSchema(resolve(schema.$ref, root), root, [...open, schema.$ref]) : undefined;
+  }
   if ('const' in schema) return fc.constant(schema.const);
   if (schema.enum) return fc.constantFrom(...schema.enum);
   const branches = schema.oneOf ?? schema.anyOf;
-  if (branches) return fc.oneof(...branches.map((branch: Json) => fromSchema(branch, root)));
-  if (schema.allOf) return fromSchema(Object.assign({}, ...schema.allOf.map((part: Json) => (part.$ref ? resolve(part.$ref, root) : part))), root);
+  if (branches) return oneOf(branches, root, open);
+  if (schema.allOf) return fromSchema(Object.assign({}, ...schema.allOf.map((part: Json) => (part.$ref ? resolve(part.$ref, root) : part))), root, open);
   switch (schema.type) {
     case 'object':
-      return objectOf(schema, root);
+      return objectOf(schema, root, open);
     case 'array':
-      return listOf(schema, root);
+      return listOf(schema, root, open);
     case 'integer':
       return fc.integer({ min: schema.minimum ?? -1000, max: Math.min(schema.maximum ?? 1000, 1000) });
     case 'number':
@@ -45,15 +54,23 @@ function fromSchema(schema: Json, root: Json): fc.Arbitrary<Json> {
   }
 }
 
-function objectOf(schema: Json, root: Json): fc.Arbitrary<Json> {
-  const members = Object.entries<Json>(schema.properties ?? {}).map(([name, member]) => [name, fromSchema(member, root)]);
-  return fc.record(Object.fromEntries(members), { requiredKeys: schema.required ?? [] });
+function oneOf(schemas: readonly Json[], root: Json, open: readonly string[]): fc.Arbitrary<Json> | undefined {
+  const possible = schemas.flatMap((each) => fromSchema(each, root, open) ?? []);
+  return possible.length > 0 ? fc.oneof(...possible) : undefined;
+}
+
+function objectOf(schema: Json, root: Json, open: readonly string[]): fc.Arbitrary<Json> | undefined {
+  const members = Object.entries<Json>(schema.properties ?? {}).map(([name, member]) => [name, fromSchema(member, root, open)] as const);
+  const required: string[] = schema.required ?? [];
+  if (members.some(([name, member]) => !member && required.includes(name))) return undefined;
+  return fc.record(Object.fromEntries(members.filter(([, member]) => member)) as Record<string, fc.Arbitrary<Json>>, { requiredKeys: required });
 }
 
 /** Short, or as long as the bounds demand; never as long as they allow. */
-function listOf(schema: Json, root: Json): fc.Arbitrary<Json> {
+function listOf(schema: Json, root: Json, open: readonly string[]): fc.Arbitrary<Json> | undefined {
   const least = schema.minItems ?? 0;
-  const items = schema.prefixItems?.length ? fc.oneof(...schema.prefixItems.map((item: Json) => fromSchema(item, root))) : fromSchema(schema.items, root);
+  const items = schema.prefixItems?.length ? oneOf(schema.prefixItems, root, open) : fromSchema(schema.items, root, open);
+  if (!items) return least === 0 ? fc.constant([]) : undefined;
   return fc.array(items, { minLength: least, maxLength: Math.min(schema.maxItems ?? 4, Math.max(least, 4)) });
 }
 

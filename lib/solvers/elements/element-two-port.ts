@@ -1,15 +1,24 @@
-/** An element of a cascade as a two-port. */
+/** An element of a cascade, other than a cascade, as a two-port. */
 import type { LineConstants } from '../lines/line-constants';
 import { lineTwoPort } from '../methods/line-two-port';
 import { impedance, openStub, parallelParts, seriesParts, shortStub, type OnePort } from '../methods/one-port';
 import { propagation } from '../methods/telegrapher';
 import { lineElementTwoPort, seriesTwoPort, shuntTwoPort, transformerTwoPort, type TwoPort } from '../methods/two-port';
+import type { PortReferences } from '../methods/two-port-coordinates';
 import { complexParts } from '../nouns/complex-number';
 import type { Phasor, Space } from '../numeric/phasor';
-import type { Element } from './element';
+import type { LeafElement } from './element';
+import { givenTwoPort } from './given-two-port';
+
+export interface Sweep {
+  readonly frequenciesHz: Float64Array;
+  readonly omega: Float64Array;
+  /** Of the whole cascade. */
+  readonly references: PortReferences;
+}
 
 /** `constants` are those of the element's line, where it has one. */
-export function elementTwoPort<T extends Phasor<T>>(space: Space<T>, element: Element, constants: LineConstants | undefined, frequenciesHz: Float64Array, omega: Float64Array): TwoPort<T> {
+export function elementTwoPort<T extends Phasor<T>>(space: Space<T>, element: LeafElement, constants: LineConstants | undefined, { frequenciesHz, omega, references }: Sweep): TwoPort<T> {
   const lineOf = (lengthM: number) => lineTwoPort(space, constants!, propagation(constants!, frequenciesHz), lengthM);
   switch (element.kind) {
     case 'line':
@@ -28,10 +37,12 @@ export function elementTwoPort<T extends Phasor<T>>(space: Space<T>, element: El
       return seriesTwoPort(space, shortStub(space, lineOf(element.length_m)));
     case 'transformer':
       return transformerTwoPort(space, element.turns_ratio);
+    case 'two_port':
+      return givenTwoPort(space, element, omega, references);
   }
 }
 
-function lumped<T extends Phasor<T>>(space: Space<T>, element: Extract<Element, { kind: 'series' | 'shunt' }>, omega: Float64Array): OnePort<T> {
+function lumped<T extends Phasor<T>>(space: Space<T>, element: Extract<LeafElement, { kind: 'series' | 'shunt' }>, omega: Float64Array): OnePort<T> {
   if (element.impedance_ohm !== undefined) return impedance(space, complexParts(element.impedance_ohm));
   return element.connection === 'series' ? seriesParts(space, omega, element) : parallelParts(space, omega, element);
 }

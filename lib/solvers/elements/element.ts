@@ -1,9 +1,10 @@
-/** The elements of a cascade: schemas, and what only the whole can say about them. */
+/** The elements of a cascade: schemas. A cascade is itself an element. */
 import { z } from 'zod';
-import type { InputProblem } from '../errors';
 import { line } from '../lines/line';
 import { complexNumber } from '../nouns/complex-number';
+import { optionalPortReferenceImpedances } from '../nouns/reference-impedance';
 import { partFields } from '../nouns/termination';
+import { representations, twoPortValues } from '../nouns/two-port-values';
 
 const lengthM = z.number().min(0).max(1e9).meta({ title: 'Length', description: 'Length of the line.', examples: [0.25], 'x-unit': 'm' });
 
@@ -33,31 +34,73 @@ const transformerElement = z
   })
   .meta({ id: 'TransformerElement', title: 'Ideal transformer', description: 'An ideal transformer: V1 = n V2.' });
 
-export const element = z
-  .discriminatedUnion('kind', [
-    lineElement,
-    lumpedElement('series', 'SeriesElement', 'In series', 'An impedance or parts in series with the path.'),
-    lumpedElement('shunt', 'ShuntElement', 'In shunt', 'An impedance or parts across the path.'),
-    stubElement('open_stub', 'OpenStubElement', 'Open stub', 'A line across the path, open at its end.'),
-    stubElement('short_stub', 'ShortStubElement', 'Shorted stub', 'A line across the path, shorted at its end.'),
-    stubElement('series_open_stub', 'SeriesOpenStubElement', 'Open series stub', 'A line in series with the path, open at its end.'),
-    stubElement('series_short_stub', 'SeriesShortStubElement', 'Shorted series stub', 'A line in series with the path, shorted at its end.'),
-    transformerElement,
-  ])
+const twoPortElement = z
+  .strictObject({
+    kind: z.literal('two_port').meta({ title: 'Kind', description: 'A two-port by its matrix.', examples: ['two_port'] }),
+    representation: z.enum(representations).meta({ title: 'Representation', description: 'What values is.', examples: ['s'] }),
+    values: twoPortValues,
+    reference_impedance_ohm: optionalPortReferenceImpedances({
+      title: 'Reference impedance',
+      description: 'What S or T in values refers to, as power waves: one for both ports, or a list of two; 50 when left out. Not with ABCD, Z or Y.',
+    }),
+  })
+  .meta({
+    id: 'TwoPortElement',
+    title: 'Two-port',
+    description: 'A two-port by its matrix, the same at every frequency or with one entry a frequency.',
+    examples: [{ kind: 'two_port', representation: 's', values: { s11: 0, s12: 0.5, s21: 0.5, s22: 0 } }],
+  });
+
+const leafElements = [
+  lineElement,
+  lumpedElement('series', 'SeriesElement', 'In series', 'An impedance or parts in series with the path.'),
+  lumpedElement('shunt', 'ShuntElement', 'In shunt', 'An impedance or parts across the path.'),
+  stubElement('open_stub', 'OpenStubElement', 'Open stub', 'A line across the path, open at its end.'),
+  stubElement('short_stub', 'ShortStubElement', 'Shorted stub', 'A line across the path, shorted at its end.'),
+  stubElement('series_open_stub', 'SeriesOpenStubElement', 'Open series stub', 'A line in series with the path, open at its end.'),
+  stubElement('series_short_stub', 'SeriesShortStubElement', 'Shorted series stub', 'A line in series with the path, shorted at its end.'),
+  transformerElement,
+  twoPortElement,
+] as const;
+
+type LeafSchema = (typeof leafElements)[number];
+/** Whatever is not itself a cascade. */
+export type LeafElement = z.output<LeafSchema>;
+
+export interface CascadeElement {
+  kind: 'cascade';
+  elements: Element[];
+  repeat: number;
+}
+
+export type Element = LeafElement | CascadeElement;
+
+type ElementInput = z.input<LeafSchema> | { kind: 'cascade'; elements: ElementInput[]; repeat?: number | undefined };
+
+export const mostElements = 200;
+const mostRepeats = 1000;
+
+const cascadeElement = z
+  .strictObject({
+    kind: z.literal('cascade').meta({ title: 'Kind', description: 'A cascade within the cascade.', examples: ['cascade'] }),
+    get elements() {
+      return elementList;
+    },
+    repeat: z.number().int().min(1).max(mostRepeats).default(1).meta({ title: 'Repeat', description: 'How often it stands in the path, one after the other.', examples: [10] }),
+  })
+  .meta({
+    id: 'CascadeElement',
+    title: 'Cascade',
+    description: 'A cascade within the cascade, up to 8 deep, as often as repeat says.',
+    examples: [{ kind: 'cascade', elements: [{ kind: 'series', inductance_h: 1e-8 }, { kind: 'shunt', capacitance_f: 4e-12 }], repeat: 10 }],
+  });
+
+export const element: z.ZodType<Element, ElementInput> = z
+  .discriminatedUnion('kind', [...leafElements, cascadeElement])
   .meta({ id: 'Element', title: 'Element', description: 'One element of a cascade.' });
 
-export type Element = z.output<typeof element>;
-
-/** An impedance or parts, and one of the two. */
-export function elementProblems(elements: readonly Element[]): InputProblem[] {
-  return elements.flatMap((each, index) => {
-    if (each.kind !== 'series' && each.kind !== 'shunt') return [];
-    const pointer = `/elements/${index}`;
-    const parts = (['resistance_ohm', 'inductance_h', 'capacitance_f'] as const).filter((name) => each[name] !== undefined);
-    if (each.impedance_ohm === undefined && parts.length === 0) {
-      return [{ pointer, code: 'no_parts', detail: `elements[${index}] must have impedance_ohm or at least one of resistance_ohm, inductance_h and capacitance_f` }];
-    }
-    if (each.impedance_ohm === undefined) return [];
-    return parts.map((name) => ({ pointer: `${pointer}/${name}`, code: 'excluded', detail: `${name} cannot stand beside impedance_ohm; leave one of them out` }));
-  });
-}
+export const elementList: z.ZodType<Element[], ElementInput[]> = z
+  .array(element)
+  .min(1)
+  .max(mostElements)
+  .meta({ title: 'Elements', description: 'From port 1 to port 2.', examples: [[{ kind: 'series', inductance_h: 1e-8 }]] });

@@ -2,11 +2,10 @@
 import { lineOverFrequency, type Line } from '../lines/line';
 import type { LineModel } from '../lines/line-constants';
 import { reflection } from '../methods/reflection';
-import { chain } from '../methods/two-port';
 import { lineOverSweep, through, type LineOverSweep, type Pair } from '../methods/wave-into-chain';
 import { terminationOnePort, type Termination } from '../nouns/termination';
 import { inSpaceOf, magnitude, type ComplexParts } from '../numeric/phasor';
-import { elementTwoPort } from './element-two-port';
+import { chainTwoPort } from './chain-of-elements';
 import type { Element } from './element';
 
 /** One entry a frequency; `absorbed` is 1 - |Gamma|^2. */
@@ -56,8 +55,7 @@ export class SourceAndLoad {
     return inSpaceOf(frequenciesHz.length, (space) => {
       const none = new Float64Array(space.length);
       const load = terminationOnePort(space, this.load, frequenciesHz, omega, { re: none, im: none });
-      const [first, ...rest] = elements.map((each) => elementTwoPort(space, each, constantsOf(each), frequenciesHz, omega));
-      const two = first && rest.reduce((before, after) => chain(space, before, after), first);
+      const two = elements.length > 0 ? chainTwoPort(space, elements, constantsOf, { frequenciesHz, omega, references: [this.source, this.source] }) : undefined;
       const v = two ? two.a.mul(load.v).add(two.b.mul(load.i)) : load.v;
       const i = two ? two.c.mul(load.v).add(two.d.mul(load.i)) : load.i;
       const { gamma, magnitude, absorbed } = reflection(space, v, i, space.constant(this.source));

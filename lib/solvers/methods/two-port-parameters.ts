@@ -2,8 +2,8 @@
  * From the scaled matrix of a chain to what is asked of it. With A, B, C, D of the chain, Z1 and Z2 the reference impedances, R1 and R2
  * their real parts, n = A Z2 + B + C Z1 Z2 + D Z1 (Frickey 1994, table I, in Kurokawa's power waves):
  *
- *   S11 = (A Z2 + B - C Z1* Z2 - D Z1*)/n     S12 = S21 = 2 sqrt(R1 R2)/n     S22 = (-A Z2* + B - C Z1 Z2* + D Z1)/n
- *   Z = [A 1; 1 D]/C     Y = [D -1; -1 A]/B     group delay = -d(arg S21)/d omega = Im((dn/d omega)/n)
+ *   S11 = (A Z2 + B - C Z1* Z2 - D Z1*)/n     S21 = 2 sqrt(R1 R2)/n     S12 = det S21     S22 = (-A Z2* + B - C Z1 Z2* + D Z1)/n
+ *   Z = [A det; 1 D]/C     Y = [D -det; -1 A]/B     det = AD - BC     group delay = -d(arg S21)/d omega = Im((dn/d omega)/n)
  */
 import type { Method } from '../calculation';
 import { decibelsPerNeper } from '../constants';
@@ -41,6 +41,8 @@ export interface Scattering<T> {
   readonly s22: T;
   /** 2 sqrt(R1 R2) factor / n; S21 is this times exp(-loss) and a power of two. */
   readonly forward: T;
+  /** The same of S12. */
+  readonly backward: T;
   readonly denominator: T;
   readonly denominatorSlope: T;
 }
@@ -49,22 +51,24 @@ export function scattering<T extends Phasor<T>>(space: Space<T>, two: TwoPort<T>
   const { a, b, c, d, slope } = two;
   const z1c = z1.conjugate();
   const z2c = z2.conjugate();
+  const root = twiceRootOfResistances(space, z1, z2);
   const denominator = a.mul(z2).add(b).add(c.mul(z1).mul(z2)).add(d.mul(z1));
   return {
     s11: a.mul(z2).add(b).sub(c.mul(z1c).mul(z2)).sub(d.mul(z1c)).div(denominator),
     s22: b.sub(a.mul(z2c)).sub(c.mul(z1).mul(z2c)).add(d.mul(z1)).div(denominator),
-    forward: two.factor.mul(twiceRootOfResistances(space, z1, z2)).div(denominator),
+    forward: two.factor.mul(root).div(denominator),
+    backward: two.backward.mul(root).div(denominator),
     denominator,
     denominatorSlope: slope.a.mul(z2).add(slope.b).add(slope.c.mul(z1).mul(z2)).add(slope.d.mul(z1)),
   };
 }
 
 /**
- * The rounding of each entry in units of Number.EPSILON. To first order it may have grown at every element as if all conspired; against
- * n it cannot: a Z2, b, c Z1 Z2 and d Z1 of a passive chain are no larger than n, and neither are their errors but for their number.
+ * The rounding of each entry in units of Number.EPSILON. To first order it may have grown at every element as if all conspired; of a passive
+ * chain it cannot, against n: a Z2, b, c Z1 Z2 and d Z1 are no larger than n, and neither are their errors but for their number.
  */
-export function roundingOfEntries<T extends Phasor<T>>(space: Space<T>, two: TwoPort<T>, { denominator }: Scattering<T>, z1: T, z2: T): TwoPort<T>['size'] {
-  const most = magnitudes(space, denominator).map((each, index) => each * two.roundings[index]);
+export function roundingOfEntries<T extends Phasor<T>>(space: Space<T>, two: TwoPort<T>, { denominator }: Scattering<T>, z1: T, z2: T, isPassive: Uint8Array): TwoPort<T>['size'] {
+  const most = magnitudes(space, denominator).map((each, index) => (isPassive[index] ? each * two.roundings[index] : Infinity));
   const ohm1 = magnitudes(space, z1);
   const ohm2 = magnitudes(space, z2);
   const least = (size: Float64Array, ohm: (index: number) => number) => size.map((each, index) => Math.min(each, most[index] / ohm(index)));
@@ -75,6 +79,27 @@ export function roundingOfEntries<T extends Phasor<T>>(space: Space<T>, two: Two
     d: least(two.size.d, (index) => ohm1[index]),
   };
 }
+
+/**
+ * Whether n is no more than rounding, at each frequency: the chain and its references then oscillate. n of a passive chain is the largest of its
+ * own terms, so that only an active one can come near.
+ */
+export function oscillates<T extends Phasor<T>>(space: Space<T>, two: TwoPort<T>, { denominator }: Scattering<T>, z1: T, z2: T): Uint8Array {
+  const n = magnitudes(space, denominator);
+  const ohm1 = magnitudes(space, z1);
+  const ohm2 = magnitudes(space, z2);
+  const [a, b, c, d] = [two.a, two.b, two.c, two.d].map((each) => magnitudes(space, each));
+  return Uint8Array.from(n, (each, index) => {
+    const terms = (x: Four) => x.a[index] * ohm2[index] + x.b[index] + x.c[index] * ohm1[index] * ohm2[index] + x.d[index] * ohm1[index];
+    const rounding = Math.min(terms(two.size), terms({ a, b, c, d }) * two.roundings[index]);
+    return each <= vanishing * rounding ? 1 : 0;
+  });
+}
+
+type Four = Readonly<Record<'a' | 'b' | 'c' | 'd', Float64Array>>;
+
+/** What is no more than this times the rounding it may have is zero. */
+export const vanishing = 8 * Number.EPSILON;
 
 /** [b1; a1] = T [a2; b2], without the scale. */
 export function transferScattering<T extends Phasor<T>>(space: Space<T>, { a, b, c, d }: TwoPort<T>, z1: T, z2: T) {
@@ -100,6 +125,11 @@ export function withScale<T>({ lossNp, exponent }: TwoPort<T>, column: ComplexCo
   return scaled(column, lossNp.map((each) => -each), exponent);
 }
 
+/** The same of what was formed with `backward`. */
+export function withBackwardScale<T>({ lossNp, backwardExponent }: TwoPort<T>, column: ComplexColumn): { re: Float64Array; im: Float64Array } {
+  return scaled(column, lossNp.map((each) => -each), backwardExponent);
+}
+
 /** Divides by the scale of the matrix, of which `factor` is done already; infinite where it overflows. */
 export function withoutScale<T>({ lossNp, exponent }: TwoPort<T>, column: ComplexColumn): { re: Float64Array; im: Float64Array } {
   return scaled(column, lossNp, exponent.map((each) => -each));
@@ -121,12 +151,14 @@ export function insertionLossDb<T extends Phasor<T>>(space: Space<T>, { lossNp, 
 }
 
 /** Largest singular value of S, squared, at one frequency: the share of incoming power that can come back out. */
-export function largestGain(s11: readonly [number, number], s21: readonly [number, number], s22: readonly [number, number]): number {
-  const power = ([re, im]: readonly [number, number]) => re * re + im * im;
+export function largestGain(s11: At, s12: At, s21: At, s22: At): number {
+  const power = ([re, im]: At) => re * re + im * im;
   const h11 = power(s11) + power(s21);
-  const h22 = power(s21) + power(s22);
-  // S^H S off the diagonal: conj(S11) S12 + conj(S21) S22, with S12 = S21.
-  const re = s11[0] * s21[0] + s11[1] * s21[1] + s21[0] * s22[0] + s21[1] * s22[1];
-  const im = s11[0] * s21[1] - s11[1] * s21[0] + s21[0] * s22[1] - s21[1] * s22[0];
+  const h22 = power(s12) + power(s22);
+  // S^H S off the diagonal: conj(S11) S12 + conj(S21) S22.
+  const re = s11[0] * s12[0] + s11[1] * s12[1] + s21[0] * s22[0] + s21[1] * s22[1];
+  const im = s11[0] * s12[1] - s11[1] * s12[0] + s21[0] * s22[1] - s21[1] * s22[0];
   return 0.5 * (h11 + h22 + Math.hypot(h11 - h22, 2 * Math.hypot(re, im)));
 }
+
+type At = readonly [re: number, im: number];

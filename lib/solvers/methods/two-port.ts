@@ -4,8 +4,8 @@
  *
  *   series Z: [1 Z; 0 1]   shunt Y: [1 0; Y 1]   transformer n: [n 0; 0 1/n]   line: cosh, sinh        Pozar table 4.1
  *
- * With (v, i) of the one-port, Z = v/i and Y = i/v: the series element is i * ABCD, the shunt one v * ABCD. All are reciprocal, so the
- * determinant of ABCD is 1 by construction and is never formed from its entries.
+ * With (v, i) of the one-port, Z = v/i and Y = i/v: the series element is i * ABCD, the shunt one v * ABCD. The determinant is never formed
+ * from the entries: det M = scale * backward scale, and both multiply along a chain. Of a reciprocal two-port the two are the same.
  */
 import type { Method } from '../calculation';
 import type { Phasor, Space } from '../numeric/phasor';
@@ -28,7 +28,7 @@ export const transmissionMatrix: Method = {
     { symbol: 'n', meaning: 'turns ratio, V1 = n V2' },
     { symbol: 'A, B, C, D', meaning: 'transmission parameters: V1 = A V2 + B I2, I1 = C V2 + D I2', unit: '1, ohm, S, 1' },
   ],
-  range: 'any chain of linear reciprocal two-ports',
+  range: 'any chain of linear two-ports',
   accuracy: 'exact; 1e-12 relative in float64',
 };
 
@@ -46,6 +46,17 @@ export interface TwoPort<T> extends Four<T> {
   readonly factor: T;
   readonly lossNp: Float64Array;
   readonly exponent: Float64Array;
+  /** det M / scale = backward * exp(-lossNp) * 2^backwardExponent: what passes from port 2 to port 1. The very `factor` where that is known. */
+  readonly backward: T;
+  readonly backwardExponent: Float64Array;
+  /** Every part is reciprocal, to the rounding of what was given. */
+  readonly isReciprocal: boolean;
+}
+
+type OneWay = 'factor' | 'exponent' | 'backward' | 'backwardExponent' | 'isReciprocal';
+
+function reciprocal<T>(factor: T, exponent: Float64Array): Pick<TwoPort<T>, OneWay> {
+  return { factor, exponent, backward: factor, backwardExponent: exponent, isReciprocal: true };
 }
 
 export function seriesTwoPort<T extends Phasor<T>>(space: Space<T>, onePort: OnePort<T>): TwoPort<T> {
@@ -58,7 +69,7 @@ export function seriesTwoPort<T extends Phasor<T>>(space: Space<T>, onePort: One
     slope: { a: zero, b: quotientSlope(space, v, i, vSlope, iSlope), c: zero, d: zero },
     size: { a: iScale, b: vScale, c: none, d: iScale },
     roundings: roundingsOf(space, onePort),
-    factor: i, lossNp: none, exponent: none,
+    lossNp: none, ...reciprocal(i, none),
   };
 }
 
@@ -72,7 +83,7 @@ export function shuntTwoPort<T extends Phasor<T>>(space: Space<T>, onePort: OneP
     slope: { a: zero, b: zero, c: quotientSlope(space, i, v, iSlope, vSlope), d: zero },
     size: { a: vScale, b: none, c: iScale, d: vScale },
     roundings: roundingsOf(space, onePort),
-    factor: v, lossNp: none, exponent: none,
+    lossNp: none, ...reciprocal(v, none),
   };
 }
 
@@ -85,7 +96,7 @@ export function transformerTwoPort<T extends Phasor<T>>(space: Space<T>, n: numb
     slope: { a: zero, b: zero, c: zero, d: zero },
     size: { a: column(n), b: none, c: none, d: column(1 / n) },
     roundings: column(1),
-    factor: space.constant(1), lossNp: none, exponent: none,
+    lossNp: none, ...reciprocal(space.constant(1), none),
   };
 }
 
@@ -99,7 +110,7 @@ export function lineElementTwoPort<T extends Phasor<T>>(space: Space<T>, line: L
     slope: { a: line.evenSlope, b: line.seriesSlope, c: line.shuntSlope, d: line.evenSlope },
     size: { a: even, b: oddScaleOf(space, line, line.series), c: oddScaleOf(space, line, line.shunt), d: even },
     roundings: line.sensitivity,
-    factor: line.turn, lossNp: line.lossNp, exponent: none,
+    lossNp: line.lossNp, ...reciprocal(line.turn, none),
   };
 }
 
@@ -125,28 +136,70 @@ function quotientSlope<T extends Phasor<T>>(space: Space<T>, x: T, y: T, xSlope:
 export function chain<T extends Phasor<T>>(space: Space<T>, first: TwoPort<T>, second: TwoPort<T>): TwoPort<T> {
   const firstSizes = mapFour<T, Float64Array>(first, (each) => magnitudes(space, each));
   const secondSizes = mapFour<T, Float64Array>(second, (each) => magnitudes(space, each));
-  const bothBlock = bothVanish(magnitudes(space, first.factor), magnitudes(space, second.factor));
+  const bothBlock = bothVanish(passagesOf(space, first), passagesOf(space, second));
   const plain = multiply(first, second);
   const product = bothBlock.includes(1) ? apart(space, bothBlock, plain, first, second, firstSizes, secondSizes) : plain;
   const slope = add(multiply(first.slope, second), multiply(first, second.slope));
   const size = sizesOfProduct(first.size, firstSizes, second.size, secondSizes);
   const shift = powersOf(...entries.map((name) => magnitudes(space, product[name])));
   const down = shift.map((each) => powerOfTwo(-each));
-  const factor = first.factor.mul(second.factor);
-  const factorShift = powersOf(magnitudes(space, factor));
   return {
     ...mapFour(product, (each) => space.scale(each, down)),
     slope: mapFour(slope, (each) => space.scale(each, down)),
     size: mapFour(size, (each) => each.map((value, index) => value * down[index])),
     roundings: first.roundings.map((each, index) => each + second.roundings[index]),
-    factor: space.scale(factor, factorShift.map((each) => powerOfTwo(-each))),
     lossNp: first.lossNp.map((each, index) => each + second.lossNp[index]),
-    exponent: first.exponent.map((each, index) => each + second.exponent[index] + factorShift[index] - shift[index]),
+    ...passagesOfChain(space, first, second, shift),
   };
 }
 
-function bothVanish(first: Float64Array, second: Float64Array): Uint8Array {
-  return Uint8Array.from(first, (each, index) => (each === 0 && second[index] === 0 ? 1 : 0));
+/** The same two-port `times` over, by squaring: 2 log2(times) chains at most. */
+export function repeated<T extends Phasor<T>>(space: Space<T>, two: TwoPort<T>, times: number): TwoPort<T> {
+  let result: TwoPort<T> | undefined;
+  let square = two;
+  for (let rest = times; ; square = chain(space, square, square)) {
+    if (rest % 2 === 1) result = result ? chain(space, result, square) : square;
+    rest = Math.floor(rest / 2);
+    if (rest === 0) return result!;
+  }
+}
+
+/** How many chains `repeated` makes. */
+export function chainsToRepeat(times: number): number {
+  const bits = times.toString(2);
+  return bits.length - 1 + bits.replaceAll('0', '').length - 1;
+}
+
+function passagesOfChain<T extends Phasor<T>>(space: Space<T>, first: TwoPort<T>, second: TwoPort<T>, shift: Float64Array): Pick<TwoPort<T>, OneWay> {
+  const through = (one: T, other: T, exponents: Float64Array, others: Float64Array) => {
+    const product = one.mul(other);
+    const up = powersOf(magnitudes(space, product));
+    return { value: space.scale(product, up.map((each) => powerOfTwo(-each))), exponent: exponents.map((each, index) => each + others[index] + up[index] - shift[index]) };
+  };
+  const { value: factor, exponent } = through(first.factor, second.factor, first.exponent, second.exponent);
+  const isSame = first.backward === first.factor && second.backward === second.factor;
+  if (isSame) return reciprocal(factor, exponent);
+  const { value: backward, exponent: backwardExponent } = through(first.backward, second.backward, first.backwardExponent, second.backwardExponent);
+  return { factor, exponent, backward, backwardExponent, isReciprocal: first.isReciprocal && second.isReciprocal };
+}
+
+interface Passages {
+  readonly forward: Float64Array;
+  readonly backward: Float64Array;
+}
+
+function passagesOf<T extends Phasor<T>>(space: Space<T>, { factor, backward }: TwoPort<T>): Passages {
+  const forward = magnitudes(space, factor);
+  return { forward, backward: backward === factor ? forward : magnitudes(space, backward) };
+}
+
+/** Nothing passes the two in either direction, and neither alone tells its two ports' worth: both matrices are singular. */
+function bothVanish(first: Passages, second: Passages): Uint8Array {
+  return Uint8Array.from(first.forward, (forward, index) => {
+    const one = [forward === 0, first.backward[index] === 0] as const;
+    const other = [second.forward[index] === 0, second.backward[index] === 0] as const;
+    return (one[0] || one[1]) && (other[0] || other[1]) && (one[0] || other[0]) && (one[1] || other[1]) ? 1 : 0;
+  });
 }
 
 /** The power of two that brings the largest of several columns to about 1; 0 where all vanish. */

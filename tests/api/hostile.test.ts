@@ -29,7 +29,7 @@ afterAll(closeDatabase);
 const crossFieldCodes = new Set(['sweep_order', 'log_from_zero', 'not_ascending', 'length_differs', 'no_parts', 'excluded', 'outside_table', 'reference_without_resistance', 'too_large', 'wrong_count',
   'bounds_order', 'not_a_dimension', 'required_dimension', 'out_of_bounds', 'out_of_reach', 'no_line', 'infinite_impedance',
   'geometry', 'missing', 'too_small', 'no_resistivity', 'line_needed', 'other_representation', 'negative_real_part', 'zero_impedance', 'source_without_resistance', 'no_source', 'load_without_resistance', 'nested_too_deep',
-  'no_wavelength', 'tolerance_out_of_reach']);
+  'no_wavelength', 'only_one', 'one_of_required', 'negative_resistance']);
 
 /** The place itself, or the object or list from which the named child is missing. */
 function resolves(root: Json, pointer: string): boolean {

@@ -8,7 +8,7 @@
 import type { Method } from '../calculation';
 import { passedOn, slopeAlong, stub, stubLength, turned, withinHalfWave } from './immittance-along-line';
 import { endOf, followLoss, isLossless, isSame, lineElement, noLengths, stageOf, stubElement, stubKinds, type FoundLengths, type Stage, type StubKind } from './match-stubs-of-line';
-import { inWavelengths, withoutDust, type DesignLine, type Match, type MatchAnswer, type MatchingProblem } from './matching';
+import { inDigits, inWavelengths, withoutDust, type DesignLine, type Match, type MatchAnswer, type MatchingProblem } from './matching';
 
 export const doubleStubMatching: Method = {
   id: 'double-stub-matching',
@@ -90,6 +90,6 @@ function describe(atSource: StubKind, atLoad: StubKind, [first, second]: readonl
 
 function forbidden(line: DesignLine, { load, wanted }: Stage, sine: number): string {
   const Y0 = 1 / Math.hypot(line.characteristicImpedance.re, line.characteristicImpedance.im);
-  const text = (value: number) => Number(value.toPrecision(6));
+  const text = inDigits;
   return `the conductance of the load, ${text(load.re * Y0)} S, is greater than Y0^2/(G sin^2(beta s)) = ${text(Y0 / (wanted.re * sine * sine))} S, which no two stubs at this spacing can match (G of the source, s the spacing)`;
 }

@@ -9,7 +9,7 @@
 import type { Method } from '../calculation';
 import type { Element } from '../elements/element';
 import type { ComplexParts } from '../numeric/phasor';
-import { inWords, isBuildable, withoutDust, type Match, type MatchAnswer, type MatchingProblem } from './matching';
+import { inDigits, inWords, isBuildable, withoutDust, type Match, type MatchAnswer, type MatchingProblem } from './matching';
 
 export const lSectionMatching: Method = {
   id: 'l-section-matching',
@@ -95,5 +95,5 @@ function describe(elements: readonly Element[]): string {
 
 function noSection(where: string, shuntedName: string, otherName: string, shunted: ComplexParts, other: ComplexParts): string {
   const most = shunted.re + (shunted.im / shunted.re) * shunted.im;
-  return `with its shunt part ${where} an L section reaches at most ${Number(most.toPrecision(6))} ohm, |Z|^2/R of the ${shuntedName}, and the ${otherName} has ${Number(other.re.toPrecision(6))} ohm`;
+  return `with its shunt part ${where} an L section reaches at most ${inDigits(most)} ohm, |Z|^2/R of the ${shuntedName}, and the ${otherName} has ${Number(other.re.toPrecision(6))} ohm`;
 }

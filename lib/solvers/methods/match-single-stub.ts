@@ -11,7 +11,7 @@ import Complex from 'complex.js';
 import type { Method } from '../calculation';
 import { slopeAlong, stub, stubLength, turned, withinHalfWave, type Immittance } from './immittance-along-line';
 import { endOf, followLoss, isLossless, isSame, lineElement, noLengths, stageOf, stubElement, stubKinds, type FoundLengths, type Stage, type StubKind } from './match-stubs-of-line';
-import { inWavelengths, withoutDust, type DesignLine, type Match, type MatchAnswer, type MatchingProblem } from './matching';
+import { inDigits, inWavelengths, withoutDust, type DesignLine, type Match, type MatchAnswer, type MatchingProblem } from './matching';
 
 export const singleStubMatching: Method = {
   id: 'single-stub-matching',
@@ -104,7 +104,7 @@ function outOfReach({ source }: MatchingProblem, line: DesignLine, kind: Immitta
   const unit = kind === 'impedance' ? 'ohm' : 'S';
   const own = kind === 'impedance' ? Zc : 1 / Zc;
   const asked = kind === 'impedance' ? source.re : new Complex(source.re, source.im).inverse().re;
-  const text = (value: number) => Number(value.toPrecision(6));
+  const text = inDigits;
   const part = kind === 'impedance' ? 'resistance' : 'conductance';
   return `along the line the ${part} of the load stays between ${text(own / ratio)} and ${text(own * ratio)} ${unit}, and the source asks for ${text(asked)} ${unit}`;
 }

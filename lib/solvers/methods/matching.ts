@@ -63,6 +63,11 @@ export function isBuildable(elements: readonly Element[]): boolean {
   );
 }
 
+/** Six digits, for a sentence; what has grown beyond every number is said in words. */
+export function inDigits(value: number): string {
+  return Number.isFinite(value) ? String(Number(value.toPrecision(6))) : 'an unbounded number of';
+}
+
 /** 1.234e-9 H as "1.234 nH", for a sentence. */
 export function inWords(value: number, unit: string): string {
   if (!Number.isFinite(value)) return `unbounded ${unit}`;

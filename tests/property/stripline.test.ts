@@ -20,8 +20,8 @@ const anyStripline = fc
     kind: fc.constant('stripline'),
     width_m: anyLength,
     plane_spacing_m: anyLength,
-    thickness: fc.oneof(fc.constant(0), fc.double({ min: 0, max: 0.999999, noNaN: true }), decades(-12, -1)),
-    offset: fc.oneof(fc.constant(0), fc.double({ min: -0.999999, max: 0.999999, noNaN: true }), decades(-12, -1).map((each) => 1 - each)),
+    thickness: fc.oneof(fc.constant(0), fc.double({ min: 0, max: 0.999999, noNaN: true }), decades(-12, -1), fc.constant(1 - 2.1e-9)),
+    offset: fc.oneof(fc.constant(0), fc.double({ min: -0.999999, max: 0.999999, noNaN: true }), decades(-8.9, -1).map((each) => 1 - each)),
     conductor: fc.oneof(fc.constantFrom('copper', 'steel', 'perfect'), fc.record({ resistivity_ohm_m: fc.oneof(decades(-300, 3), fc.constantFrom(0, 1e3)), relative_permeability: decades(-3, 6) })),
     dielectric: fc.oneof(
       fc.constantFrom('vacuum', 'air', 'fr4'),
@@ -31,7 +31,8 @@ const anyStripline = fc
   })
   .map(({ thickness, offset, ...line }) => {
     const thickness_m = thickness * line.plane_spacing_m < 1e-10 ? 0 : thickness * line.plane_spacing_m;
-    return { ...line, thickness_m, offset_m: 0.5 * (line.plane_spacing_m - thickness_m) * offset };
+    const room = 0.5 * (line.plane_spacing_m - thickness_m);
+    return { ...line, thickness_m, offset_m: Math.sign(offset) * Math.max(0, Math.min(room * Math.abs(offset), room - 1.01e-9 * line.plane_spacing_m)) };
   });
 const anyFrequency = fc.oneof(decades(-300, 15), decades(3, 12), fc.constantFrom(0, 1e15, 5e-324));
 const strip = fc.record({ width: decades(-3, 2), thickness: decades(-3, 1), gapBelow: decades(-2, 1), gapAbove: decades(-2, 1) });
@@ -95,7 +96,7 @@ describe('a stripline', () => {
     run(
       fc.property(decades(2, 8), fc.constantFrom(0, 0.03, 0.4), fc.double({ min: 0.05, max: 0.95, noNaN: true }), (width, thickness, share) => {
         const [gapBelow, gapAbove] = [share * (1 - thickness), (1 - share) * (1 - thickness)];
-        const at = (w: number) => (thickness === 0 ? flatStripCapacitance(w, gapBelow, gapAbove) : thickStripCapacitance({ width: w, thickness, gapBelow, gapAbove }).capacitance);
+        const at = (w: number) => (thickness === 0 ? flatStripCapacitance(w, gapBelow, gapAbove) : thickStripCapacitance({ width: w, thickness, gapBelow, gapAbove })!.capacitance);
         const plates = (w: number) => w / gapBelow + w / gapAbove;
         expect((at(2 * width) - at(width)) / plates(width)).toBeCloseTo(1, 11);
         expect(at(width)).toBeGreaterThan(plates(width));
@@ -108,7 +109,7 @@ describe('a stripline', () => {
       fc.property(decades(-6, 4), decades(-6, 0), (width, share) => {
         const flat = flatStripCapacitance(width, 0.5 * share, 1 - 0.5 * share);
         const thin = thickStripCapacitance({ width, thickness: 1e-13 * Math.min(1, width, share), gapBelow: 0.5 * share, gapAbove: 1 - 0.5 * share });
-        expect(apart(thin.capacitance, flat)).toBeLessThan(2e-12);
+        expect(apart(thin!.capacitance, flat)).toBeLessThan(2e-12);
       }),
     );
   });
@@ -186,6 +187,9 @@ describe('a stripline', () => {
     expect(refused({ thickness_m: 1e-3 })).toEqual(['plane_spacing_m']);
     expect(refused({ thickness_m: 9.99e-4 })).toEqual([]);
     expect(refused({ thickness_m: 5e-4, offset_m: 2.4e-4 })).toEqual([]);
+    expect(refused({ thickness_m: 5e-4, offset_m: 2.5e-4 - 1.1e-12 })).toEqual([]);
+    expect(refused({ thickness_m: 5e-4, offset_m: 2.5e-4 - 0.9e-12 })).toEqual(['offset_m']);
+    expect(refused({ thickness_m: 1e-3 * (1 - 1e-9) })).toEqual(['offset_m']);
     expect(refused({ thickness_m: 5e-4, offset_m: -2.6e-4 })).toEqual(['offset_m']);
     expect(refused({ offset_m: 5e-4 })).toEqual(['offset_m']);
     expect(refused({ thickness_m: 1e-11, offset_m: 1, temperature_c: -273 })).toEqual(['thickness_m', 'offset_m', 'temperature_c']);

@@ -1,8 +1,9 @@
 /** Stripline: a strip between two planes, filled by one dielectric. Its capacitance is all there is to know, and it is computed exactly. */
 import type { Method } from '../calculation';
 import { speedOfLightMPerS, vacuumPermeabilityHPerM } from '../constants';
+import { ImpossibleInput } from '../errors';
 import { flatStripCapacitance } from '../numeric/flat-strip-between-planes';
-import { thickStripCapacitance, type StripBetweenPlanes } from '../numeric/thick-strip-between-planes';
+import { thickStripCapacitance, type Prevertices, type StripBetweenPlanes, type StripCapacitance } from '../numeric/thick-strip-between-planes';
 
 export const flatStripline: Method = {
   id: 'stripline-flat',
@@ -40,15 +41,22 @@ export const thickStripline: Method = {
     { symbol: 'c_0', meaning: 'capacitance over permittivity' },
     { symbol: String.raw`\eta_0`, meaning: 'impedance of free space', unit: 'ohm' },
   ],
-  range: 'any rectangle between the planes, below the first higher mode',
+  range: 'any rectangle between the planes, a billionth of their distance or more from each, below the first higher mode',
   accuracy: 'exact; 1e-12 relative in float64',
 };
 
 const freeSpaceImpedance = vacuumPermeabilityHPerM * speedOfLightMPerS;
 
-/** eta0/c0 in ohm: the impedance in vacuum. Source: the two methods above. Range: any. Accuracy: theirs. Throws nothing. */
+/** Throws `ImpossibleInput` where there is no solution, which no dimensions in the range are known to bring about. */
+function thickCapacitance(strip: StripBetweenPlanes, from?: Prevertices): StripCapacitance {
+  const found = thickStripCapacitance(strip, from);
+  if (!found) throw new ImpossibleInput([{ pointer: '', code: 'no_solution', detail: 'the dimensions of the stripline are too far apart in size for its field to be solved' }]);
+  return found;
+}
+
+/** eta0/c0 in ohm: the impedance in vacuum. Source: the two methods above. Range and accuracy: theirs. Throws as `thickCapacitance` does. */
 export function striplineImpedance(strip: StripBetweenPlanes): number {
-  return freeSpaceImpedance / (strip.thickness === 0 ? flatStripCapacitance(strip.width, strip.gapBelow, strip.gapAbove) : thickStripCapacitance(strip).capacitance);
+  return freeSpaceImpedance / (strip.thickness === 0 ? flatStripCapacitance(strip.width, strip.gapBelow, strip.gapAbove) : thickCapacitance(strip).capacitance);
 }
 
 /** Of the least dimension: what is left of the series after the sixth order is 1e-12. */
@@ -56,14 +64,14 @@ const recessionStep = 0.01;
 
 /**
  * dL/dn in H/m per m, as every surface recedes by n: width w - 2n, thickness t - 2n, gaps g + 2n. Source: Wheeler 1942 for its use; central
- * difference of sixth order of mu0/c0. Range: thickness above 0. Accuracy: 1e-9. Throws nothing.
+ * difference of sixth order of mu0/c0. Range: thickness above 0. Accuracy: 1e-9. Throws as `thickCapacitance` does.
  */
 export function striplineRecession(strip: StripBetweenPlanes): number {
   const { width, thickness, gapBelow, gapAbove } = strip;
-  const { prevertices } = thickStripCapacitance(strip);
+  const { prevertices } = thickCapacitance(strip);
   const step = 0.5 * recessionStep * Math.min(width, thickness, gapBelow, gapAbove);
   const inductance = (n: number) =>
-    vacuumPermeabilityHPerM / thickStripCapacitance({ width: width - 2 * n, thickness: thickness - 2 * n, gapBelow: gapBelow + 2 * n, gapAbove: gapAbove + 2 * n }, prevertices).capacitance;
+    vacuumPermeabilityHPerM / thickCapacitance({ width: width - 2 * n, thickness: thickness - 2 * n, gapBelow: gapBelow + 2 * n, gapAbove: gapAbove + 2 * n }, prevertices).capacitance;
   const difference = (order: number) => inductance(order * step) - inductance(-order * step);
   return (45 * difference(1) - 9 * difference(2) + difference(3)) / (60 * step);
 }

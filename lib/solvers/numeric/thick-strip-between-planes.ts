@@ -39,15 +39,17 @@ export interface StripCapacitance {
 
 /**
  * Source: Schwarz-Christoffel formula (Churchill, Complex Variables; Nehari, Conformal Mapping, chapter 5; from memory); elliptic for a strip in the
- * middle, as Bates 1956 has it. Range: any rectangle between the planes. Accuracy: 1e-12. Throws RangeError should the side lengths not be met in
- * `mostSteps`, which no dimension is known to bring about. The trap: the points crowd by exp(pi w/g); they are kept as logarithms of their distances.
+ * middle, as Bates 1956 has it. Range: gaps from a billionth of the distance of the planes. Accuracy: 1e-12. Returns null should the side lengths not
+ * be met in `mostSteps`, which no dimension in the range is known to bring about. The trap: the points crowd by exp(pi w/g); they are kept as
+ * logarithms of their distances, and the wall under a wide strip bounds them.
  */
-export function thickStripCapacitance(strip: StripBetweenPlanes, from?: Prevertices): StripCapacitance {
+export function thickStripCapacitance(strip: StripBetweenPlanes, from?: Prevertices): StripCapacitance | null {
   const below = Math.min(0.5 * strip.width, wallAfterGaps * strip.gapBelow);
   const above = Math.min(0.5 * strip.width, wallAfterGaps * strip.gapAbove);
   const scale = Math.PI / (strip.gapBelow + strip.thickness + strip.gapAbove);
   const wanted: Wanted = [Math.log(below * scale), Math.log(above * scale), Math.log(strip.gapBelow / strip.gapAbove), Math.log(strip.thickness / (strip.gapBelow + strip.gapAbove))];
   const prevertices = solve(wanted, from);
+  if (!prevertices) return null;
   const plates = (0.5 * strip.width - below) / strip.gapBelow + (0.5 * strip.width - above) / strip.gapAbove;
   return { capacitance: 2 * (halfCapacitance(prevertices) + plates), prevertices };
 }
@@ -69,14 +71,17 @@ const mostSteps = 60;
 const longestStep = 2;
 const differenceStep = 1e-6;
 const closeEnough = 1e-13;
+/** A step that leaves no more than this part was made with derivatives that are good enough for the next. */
+const goodStep = 0.1;
 
 /** Newton's method with differences for derivatives: a step that is short enough always leads nearer, as every side grows with its own distance. */
-function solve(wanted: Wanted, from: Prevertices = [0, 0, 0, 0]): Prevertices {
+function solve(wanted: Wanted, from: Prevertices = [0, 0, 0, 0]): Prevertices | null {
   let at: Prevertices = from;
   let residual = residualOf(at, wanted);
+  let columns: readonly (readonly number[])[] | undefined;
   for (let step = 0; step < mostSteps; step++) {
     if (largest(residual) < closeEnough) return at;
-    const columns = at.map((_, index) => residualOf(moved(at, index, differenceStep), wanted).map((each, row) => (each - residual[row]) / differenceStep));
+    columns ??= at.map((_, index) => residualOf(moved(at, index, differenceStep), wanted).map((each, row) => (each - residual[row]) / differenceStep));
     const full = solveFour(columns, residual);
     const length = Math.max(1, largest(full) / longestStep);
     at = at.map((each, index) => each - full[index] / length) as unknown as Prevertices;
@@ -84,8 +89,9 @@ function solve(wanted: Wanted, from: Prevertices = [0, 0, 0, 0]): Prevertices {
     residual = residualOf(at, wanted);
     // Rounding of the sides ends it a little above `closeEnough`, where the dimensions are far apart.
     if (largest(full) < 1e-9 && largest(residual) >= 0.5 * before) return at;
+    if (largest(residual) > goodStep * before) columns = undefined;
   }
-  throw new RangeError('no map of the strip was found');
+  return null;
 }
 
 const largest = (values: readonly number[]) => values.reduce((most, each) => Math.max(most, Math.abs(each)), 0);

@@ -1,13 +1,16 @@
 """Dimensions that give a wanted impedance, to 30 digits.
 
-Perfect conductors have closed forms, here solved for the dimension: no search. Strips between planes are solved on the elliptic integrals
-themselves (Cohn 1954), with 130 digits, where the engine uses arithmetic-geometric means; solid copper on its Bessel functions (Schelkunoff 1934).
-Sensitivities are the analytic derivatives. A line with a lossy filling has a complex impedance, of which the real part is the wanted one.
+Perfect conductors have closed forms, here solved for the dimension: no search. Strips between planes and coplanar strips are solved by theta
+functions of the nome, where the engine uses arithmetic-geometric means; solid copper on its Bessel functions (Schelkunoff 1934); what has only an
+approximate formula on the formula, with 60 digits and by secants, which proves the search and not the formula.
+Sensitivities are derivatives with all digits. A line with a lossy filling has a complex impedance, of which the real part is the wanted one.
 """
 
 import mpmath as mp
 
 from support import J, LIGHT, check, exact, write
+
+mp.mp.dps = 60
 
 MU = mp.mpf("1.25663706127e-6")
 ETA = MU * LIGHT
@@ -23,7 +26,16 @@ def filling(dielectric):
     return er * (1 - J * tangent)
 
 
-# kind -> (form factor of the dimensions: Zc = eta / sqrt(er) * F, its inverse for each dimension)
+def twist(line):
+    """Lefferson 1971: the share of the insulation, from the angle of the twist in degrees."""
+    degrees = mp.degrees(mp.atan(mp.pi * exact(line["twists_per_m"]) * exact(line["insulation_diameter_m"])))
+    return min(mp.mpf(1), mp.mpf("0.25") + mp.mpf("0.0004") * degrees**2)
+
+
+# What share of the insulation's or the substrate's permittivity beyond 1 the field sees.
+SHARES = {"twisted_pair": twist, "coplanar": lambda line: mp.mpf("0.5")}
+
+# kind -> (form factor of the dimensions: Zc = eta / sqrt(effective permittivity) * F, its inverse for each dimension)
 
 FORMS = {
     "coaxial": (
@@ -59,7 +71,28 @@ FORMS = {
             "plane_spacing_m": lambda g, f: mp.pi * g["width_m"] / (2 * strip_argument(f)),
         },
     ),
+    "twisted_pair": (
+        lambda g: mp.acosh(g["insulation_diameter_m"] / g["conductor_diameter_m"]) / mp.pi,
+        {"conductor_diameter_m": lambda g, f: g["insulation_diameter_m"] / mp.cosh(mp.pi * f)},
+    ),
+    # Wen 1969: F = K(k') / (4 K(k)), k = w / (w + 2 s).
+    "coplanar": (
+        lambda g: slot(g["width_m"] / (g["width_m"] + 2 * g["gap_m"])),
+        {
+            "width_m": lambda g, f: 2 * g["gap_m"] * modulus(mp.exp(-4 * mp.pi * f)) / (1 - modulus(mp.exp(-4 * mp.pi * f))),
+            "gap_m": lambda g, f: g["width_m"] * (1 / modulus(mp.exp(-4 * mp.pi * f)) - 1) / 2,
+        },
+    ),
 }
+
+
+def slot(k):
+    return mp.ellipk(1 - k**2) / (4 * mp.ellipk(k**2))
+
+
+def modulus(nome):
+    """k = theta2^2 / theta3^2 (DLMF 22.2), where the nome is exp(-pi K'/K)."""
+    return (mp.jtheta(2, 0, nome) / mp.jtheta(3, 0, nome)) ** 2
 
 
 def strip(argument):
@@ -67,10 +100,7 @@ def strip(argument):
 
 
 def strip_argument(factor):
-    """The nome gives the modulus without a search: q = exp(-pi K'/K), k = theta2^2 / theta3^2 (DLMF 22.2)."""
-    nome = mp.exp(-mp.pi / (4 * factor))
-    k = (mp.jtheta(2, 0, nome) / mp.jtheta(3, 0, nome)) ** 2
-    return mp.asech(k)
+    return mp.asech(modulus(mp.exp(-mp.pi / (4 * factor))))
 
 
 def perfect(case):
@@ -78,7 +108,8 @@ def perfect(case):
     form, inverses = FORMS[line["kind"]]
     given = {name: exact(value) for name, value in line.items() if name.endswith("_m")}
     # Re(Zc) = eta Re(1/sqrt(er)) F; a constant loss tangent does nothing to the limit at direct current.
-    root = 1 / mp.sqrt(filling(line.get("dielectric")))
+    share = SHARES.get(line["kind"], lambda _: mp.mpf(1))(line)
+    root = 1 / mp.sqrt(1 + share * (filling(line.get("dielectric")) - 1))
     scale = mp.re(root) * ETA
     wanted = exact(case["characteristic_impedance_ohm"])
     value = inverses[vary](given, wanted / scale)
@@ -111,6 +142,12 @@ CASES = [
     ("stripline", "50 ohm between planes 1 mm apart", {"plane_spacing_m": 1e-3}, "width_m", 50, 1e9, LOSSY),
     ("stripline", "120 ohm, a narrow strip", {"plane_spacing_m": 1e-3}, "width_m", 120, 1e9, None),
     ("stripline", "10 ohm, a wide strip", {"plane_spacing_m": 0.5e-3}, "width_m", 10, 1e9, PTFE),
+    ("twisted_pair", "untwisted, 100 ohm", {"insulation_diameter_m": 0.5e-3, "twists_per_m": 0}, "conductor_diameter_m", 100, 1e7, PTFE),
+    ("twisted_pair", "60 turns in a metre, 120 ohm", {"insulation_diameter_m": 1e-3, "twists_per_m": 60}, "conductor_diameter_m", 120, 1e7, {"relative_permittivity": 2.26}),
+    ("coplanar", "50 ohm on a thick substrate, the width", {"gap_m": 0.1e-3}, "width_m", 50, 1e9, {"relative_permittivity": 9.8}),
+    ("coplanar", "50 ohm on a thick substrate, the gap", {"width_m": 0.3e-3}, "gap_m", 50, 1e9, {"relative_permittivity": 9.8}),
+    ("coplanar", "120 ohm, lossy", {"width_m": 0.3e-3}, "gap_m", 120, 1e9, LOSSY),
+    ("coplanar", "25 ohm, a fine gap", {"width_m": 1e-3}, "gap_m", 25, 1e9, {"relative_permittivity": 12.9}),
     ("stripline", "planes for 75 ohm over 0.3 mm", {"width_m": 0.3e-3}, "plane_spacing_m", 75, 1e9, PTFE),
 ]
 EXTRA = {
@@ -118,15 +155,14 @@ EXTRA = {
     "two_wire": {"conductor": PERFECT},
     "wire_over_plane": {"conductor": PERFECT},
     "parallel_plate": {"conductor": PERFECT},
+    "twisted_pair": {"conductor": PERFECT},
+    "coplanar": {"conductor": PERFECT},
     "stripline": {"conductor": PERFECT, "thickness_m": 0},
 }
-KINDS = ("coaxial", "coaxial, copper")
 
 
 def exact_cases():
     for kind, name, given, vary, wanted, frequency, dielectric in CASES:
-        if kind not in KINDS:
-            continue
         line = {"kind": kind, **given, **EXTRA[kind], **({"dielectric": dielectric} if dielectric else {})}
         yield f"{kind.replace('_', ' ')}: {name}", {"line": line, "vary": vary, "characteristic_impedance_ohm": wanted, "frequency_hz": frequency}
 
@@ -161,23 +197,79 @@ def copper(case):
     ratio = mp.exp(2 * mp.pi * wanted * mp.sqrt(mp.re(permittivity)) / ETA)
     start = other / ratio if vary == "inner_diameter_m" else other * ratio
     with mp.workdps(50):
-        value = mp.findroot(lambda x: real(x) - wanted, (start, start * mp.mpf("1.001")), tol=mp.mpf(10) ** -80)
+        value = mp.findroot(lambda x: real(x) - wanted, (start, start * mp.mpf("1.001")), tol=mp.mpf(10) ** -45)
         slope = mp.diff(real, value, h=value * mp.mpf(10) ** -15)
     return {"/value": value, "/achieved_impedance_ohm": copper_impedance(*sizes(value), omega, permittivity), "/sensitivity_ohm_per_m": slope}
 
 
-CLOSED = "closed form of perfect conductors, solved for the dimension, computed to 30 digits; strips by theta functions of the nome (Cohn, Characteristic impedance of the shielded-strip transmission line, IRE Trans. MTT-2 (1954) 52-57; DLMF 22.2), derivative analytic"
+def hammerstad_jensen(line):
+    """Of a flat strip, without dispersion: equations 1 to 9 of the paper, from memory."""
+    er, u = exact(line["dielectric"]["relative_permittivity"]), line["width_m"] / line["height_m"]
+    n = mp.mpf
+    f = 6 + (2 * mp.pi - 6) * mp.exp(-((n("30.666") / u) ** n("0.7528")))
+    a = 1 + mp.log((u**4 + (u / 52) ** 2) / (u**4 + n("0.432"))) / 49 + mp.log(1 + (u / n("18.1")) ** 3) / n("18.7")
+    b = n("0.564") * ((er - n("0.9")) / (er + 3)) ** n("0.053")
+    effective = (er + 1) / 2 + (er - 1) / 2 * (1 + 10 / u) ** (-a * b)
+    return ETA / (2 * mp.pi) * mp.log(f / u + mp.sqrt(1 + 4 / u**2)) / mp.sqrt(effective)
+
+
+def ghione_naldi(line):
+    """A coplanar line over a plane, by the two conformal maps of its halves, from memory."""
+    er, w, s, h = exact(line["dielectric"]["relative_permittivity"]), line["width_m"], line["gap_m"], line["height_m"]
+    above = slot(w / (w + 2 * s))
+    below = slot(mp.tanh(mp.pi * w / (4 * h)) / mp.tanh(mp.pi * (w + 2 * s) / (4 * h)))
+    # Admittances of the two halves: 2 K(k)/K(k') = 1/(2 F).
+    empty, filled = 1 / (2 * above) + 1 / (2 * below), 1 / (2 * above) + er / (2 * below)
+    return ETA / mp.sqrt(empty * filled)
+
+
+FORMULAS = {"microstrip": hammerstad_jensen, "coplanar": ghione_naldi}
+FORMULA_CASES = [
+    ("microstrip", "50 ohm on laminate, the width", {"height_m": 1.6e-3, "dispersion": False}, "width_m", 50, 1e8, 4.3),
+    ("microstrip", "50 ohm on alumina, the width", {"height_m": 0.635e-3, "dispersion": False}, "width_m", 50, 1e8, 9.8),
+    ("microstrip", "75 ohm over 0.5 mm, the height", {"width_m": 0.5e-3, "dispersion": False}, "height_m", 75, 1e8, 2.2),
+    ("microstrip", "15 ohm, a wide strip", {"height_m": 0.5e-3, "dispersion": False}, "width_m", 15, 1e8, 4.3),
+    ("coplanar", "over a plane, 50 ohm, the width", {"gap_m": 0.2e-3, "height_m": 1e-3, "backed": True}, "width_m", 50, 1e9, 4.3),
+    ("coplanar", "over a plane, 60 ohm, the gap", {"width_m": 0.4e-3, "height_m": 1e-3, "backed": True}, "gap_m", 60, 1e9, 4.3),
+    ("coplanar", "over a plane, 70 ohm, the height", {"width_m": 1e-3, "gap_m": 0.6e-3, "backed": True}, "height_m", 70, 1e9, 2.2),
+]
+
+
+def by_formula(case):
+    line, vary = case["line"], case["vary"]
+    sizes = {name: exact(value) for name, value in line.items() if name.endswith("_m")}
+    impedance = lambda x: FORMULAS[line["kind"]]({**line, **sizes, vary: x})
+    wanted = exact(case["characteristic_impedance_ohm"])
+    # In the logarithm of the dimension, which spans decades.
+    value = mp.exp(mp.findroot(lambda y: impedance(mp.exp(y)) - wanted, (mp.log(mp.mpf("5e-4")), mp.log(mp.mpf("6e-4")))))
+    return {"/value": value, "/achieved_impedance_ohm": mp.mpc(impedance(value)), "/sensitivity_ohm_per_m": mp.diff(impedance, value, h=value * mp.mpf(10) ** -15)}
+
+
+CLOSED = "closed form of perfect conductors, solved for the dimension, computed to 30 digits (Pozar, Microwave Engineering, 4th ed., table 2.1, from memory)"
+THETA = "the modulus by theta functions of the nome (DLMF 22.2), computed to 30 digits; "
+SOURCES = {
+    "stripline": THETA + "Cohn, Characteristic impedance of the shielded-strip transmission line, IRE Trans. MTT-2 (1954) 52-57",
+    "coplanar": THETA + "Wen, Coplanar waveguide, IEEE Trans. MTT-17 (1969) 1087-1090",
+    "twisted pair": "formula solved for the wire, computed to 30 digits; Lefferson, Twisted magnet wire transmission line, IEEE Trans. PHP-7 (1971) 148-154 (from memory)",
+}
 BESSEL = "Bessel functions of solid copper inside a thick copper wall (Schelkunoff, The electromagnetic theory of coaxial transmission lines and cylindrical shields, Bell Syst. Tech. J. 13 (1934) 532-579), the root by secants with 50 digits"
-DIFFERENCES = {"/sensitivity_ohm_per_m": {"tolerance": 1e-9, "reason": "a derivative by extrapolated differences of float64 numbers loses a third of their digits"}}
+SECANTS = {
+    "microstrip": "the root by secants with 60 digits of the formulas of Hammerstad and Jensen, Accurate models for microstrip computer-aided design, MTT-S Digest (1980) 407-409 (from memory)",
+    "coplanar": "the root by secants with 60 digits of the conformal maps of Ghione and Naldi, Coplanar waveguides for MMIC applications, IEEE Trans. MTT-35 (1987) 260-267 (from memory)",
+}
+DIFFERENCES = {"/sensitivity_ohm_per_m": {"tolerance": 1e-10, "reason": "a derivative by extrapolated differences of float64 numbers loses a third of their digits"}}
 
 
 def checks():
     for name, case in exact_cases():
-        yield check("lines/dimension", name, CLOSED, case, perfect(case), 1e-12, exceptions=DIFFERENCES)
-    if "coaxial, copper" in KINDS:
-        for name, given, vary, wanted, frequency, dielectric in COPPER_CASES:
-            case = {"line": {"kind": "coaxial", **given, "dielectric": dielectric}, "vary": vary, "characteristic_impedance_ohm": wanted, "frequency_hz": frequency}
-            yield check("lines/dimension", f"coaxial, copper: {name}", BESSEL, case, copper(case), 1e-12, exceptions=DIFFERENCES)
+        yield check("lines/dimension", name, SOURCES.get(name.split(":")[0], CLOSED), case, perfect(case), 1e-12, exceptions=DIFFERENCES)
+    for name, given, vary, wanted, frequency, dielectric in COPPER_CASES:
+        case = {"line": {"kind": "coaxial", **given, "dielectric": dielectric}, "vary": vary, "characteristic_impedance_ohm": wanted, "frequency_hz": frequency}
+        yield check("lines/dimension", f"coaxial, copper: {name}", BESSEL, case, copper(case), 1e-12, exceptions=DIFFERENCES)
+    for kind, name, given, vary, wanted, frequency, er in FORMULA_CASES:
+        line = {"kind": kind, **given, "thickness_m": 0, "conductor": PERFECT, "dielectric": {"relative_permittivity": er}}
+        case = {"line": line, "vary": vary, "characteristic_impedance_ohm": wanted, "frequency_hz": frequency}
+        yield check("lines/dimension", f"{kind}: {name}", SECANTS[kind], case, by_formula(case), 1e-12, exceptions=DIFFERENCES)
 
 
 if __name__ == "__main__":

@@ -26,8 +26,8 @@ export const dimensionSearch: Method = {
 };
 
 const cells = 128;
-/** Where a range begins at 0: nine decades below its end. */
-const smallestShare = 1e-9;
+/** Where a range begins at 0: thirteen decades below its end, as from a kilometre to a tenth of a nanometre. */
+const smallestShare = 1e-13;
 
 /** Points from `least` to `greatest`, both included, in equal ratios, as a dimension spans decades; on both sides of 0 where it may be negative. */
 export function pointsBetween(least: number, greatest: number): Float64Array {

@@ -136,9 +136,14 @@ function lineAt(given: Input, x: number): LineAt | null {
 /** The schema alone says where a line ends, and says it fast; a model may take milliseconds where conductors nearly touch. */
 function impedanceOf(given: Input): PartialFunction {
   const kind = geometryKinds.get(given.line.kind)!;
+  const known = new Map<number, number | null>();
   return {
     isDefined: (x) => 'line' in lineWith(kind, given.line, given.vary, x),
-    valueAt: (x) => lineAt(given, x)?.characteristicImpedance.re ?? null,
+    valueAt(x) {
+      const value = known.has(x) ? known.get(x)! : (lineAt(given, x)?.characteristicImpedance.re ?? null);
+      known.set(x, value);
+      return value;
+    },
   };
 }
 

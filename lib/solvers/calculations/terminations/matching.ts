@@ -244,7 +244,7 @@ function collect(given: Input, circuit: SourceAndLoad, design: MatchingProblem, 
       }
       const reflected = circuit.reflection(match.elements, at);
       if (!(reflected.magnitude[0] < matched)) {
-        impossible.push({ topology, reason: `${match.description}: so sharp a match is beyond numbers of 16 digits, which leave a reflection of ${reflected.magnitude[0].toPrecision(2)}` });
+        impossible.push({ topology, reason: `${match.description}: so sharp a match is beyond numbers of 16 digits, which leave a reflection of ${Number.isFinite(reflected.magnitude[0]) ? reflected.magnitude[0].toPrecision(2) : 'no value'}` });
         continue;
       }
       const pointer = `/solutions/${solutions.length}`;

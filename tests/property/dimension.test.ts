@@ -164,7 +164,6 @@ describe('a wrong request', () => {
           const changed = Object.fromEntries(Object.entries(changes).filter(([name]) => dimensions.includes(name)));
           const input = { line: { ...line, ...changed }, vary, ...rest };
           const refusals = refusalsOf(input);
-          // A second of a processor to itself, which it may not have here.
           if (refusals.length > 0) return refusals.forEach(({ detail }) => expect(detail).not.toMatch(/NaN|Infinity|undefined/));
           const { result } = find(input);
           expect(dimension.output.safeParse(result).error).toBeUndefined();

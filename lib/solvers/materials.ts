@@ -29,7 +29,7 @@ export const referenceTemperatureC = 20;
 const handbook = 'CRC Handbook of Chemistry and Physics, 97th ed., section 12, electrical resistivity of pure metals (from memory)';
 
 /** 1/58 ohm mm2/m, IEC 60028; written out, for a compiler may fold a division to a neighbouring number. */
-const annealedCopperOhmM = 1.724137931034483e-08;
+const annealedCopperOhmM = 1.724137931034483e-8;
 
 export const conductors = [
   { name: 'copper', title: 'Copper, annealed', resistivityOhmM: annealedCopperOhmM, relativePermeability: 1, temperatureCoefficientPerK: 0.00393, source: 'IEC 60028:1925', condition: 'international annealed copper standard, 20 degC' },

@@ -15,7 +15,7 @@ const conductorSchema = z
   .object({
     name: z.enum(conductorNames).meta({ description: 'The name that requests give.', examples: ['copper'] }),
     title: title('Copper, annealed'),
-    resistivity_ohm_m: z.number().min(0).max(1).meta({ description: 'Resistivity at 20 degC; 0 of a perfect conductor.', examples: [1.7241379310344828e-8] }),
+    resistivity_ohm_m: z.number().min(0).max(1).meta({ description: 'Resistivity at 20 degC; 0 of a perfect conductor.', examples: [1.724e-8] }),
     relative_permeability: z.number().min(0).max(1e6).meta({ description: 'Relative permeability.', examples: [1] }),
     temperature_coefficient_per_k: z.number().min(-1).max(1).meta({ description: 'Of the resistivity, linear, referred to 20 degC.', examples: [0.00393] }),
     source,
@@ -82,7 +82,7 @@ const nominalSize = z.string().max(20).meta({ description: 'Nominal area in mm2.
 const wireShape = {
   conductor: z.enum(conductorNames).meta({ description: 'Material of the wire.', examples: ['copper'] }),
   temperature_c: z.number().min(lowestTemperatureC).max(highestTemperatureC).meta({ description: 'Temperature of the wire.', examples: [20] }),
-  resistivity_ohm_m: z.number().min(0).max(1).meta({ description: 'Resistivity of the material at that temperature.', examples: [1.7241379310344828e-8] }),
+  resistivity_ohm_m: z.number().min(0).max(1).meta({ description: 'Resistivity of the material at that temperature.', examples: [1.724e-8] }),
 };
 const gaugeSource = z.string().max(1000).meta({ description: 'Where the size and the resistivity are published.', examples: ['ASTM B258; resistivity of copper: IEC 60028:1925'] });
 const gaugeCondition = z.string().max(1000).meta({ description: 'What the numbers hold under.', examples: ['solid round wire, direct current, 20 degC'] });

@@ -4,9 +4,9 @@ import { describe, expect, it } from 'vitest';
 import { ImpossibleInput } from '@/lib/solvers/errors';
 import { line as lineSchema, lineOverFrequency } from '@/lib/solvers/lines/line';
 import { findCalculation } from '@/lib/solvers/registry';
+import { decades } from '../support/arbitraries';
 
 const run = <Arguments>(property: fc.IProperty<Arguments>, runs = 100) => fc.assert(property, { numRuns: runs, seed: 20261201 });
-const decades = (from: number, to: number) => fc.double({ min: from, max: to, noNaN: true }).map((power) => 10 ** power);
 
 function impedance(line: object, frequency_hz = 1e6): number {
   const calculation = findCalculation('lines', 'secondary-constants')!;

@@ -3,6 +3,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { ImpossibleInput } from '@/lib/solvers/errors';
 import { findCalculation } from '@/lib/solvers/registry';
+import { decades, rlgcUpTo, lossless } from '../support/arbitraries';
 
 type Column = (number | null)[];
 interface ComplexColumn {
@@ -46,16 +47,7 @@ function solve(id: string, input: object) {
 const budget = (input: object) => solve('power-budget', input).result as Budget;
 const wave = (input: object) => solve('standing-wave', input).result as Wave;
 
-const decades = (low: number, high: number) => fc.double({ min: low, max: high, noNaN: true }).map((exponent) => 10 ** exponent);
-const orNone = (value: fc.Arbitrary<number>) => fc.oneof({ weight: 4, arbitrary: value }, { weight: 1, arbitrary: fc.constant(0) });
-const rlgc = fc.record({
-  kind: fc.constant('rlgc'),
-  resistance_ohm_per_m: orNone(decades(-6, 3)),
-  inductance_h_per_m: decades(-8, -5),
-  conductance_s_per_m: orNone(decades(-10, -2)),
-  capacitance_f_per_m: decades(-12, -9),
-});
-const lossless = fc.record({ kind: fc.constant('lossless'), characteristic_impedance_ohm: decades(0, 3), velocity_factor: fc.double({ min: 0.1, max: 1, noNaN: true }) });
+const rlgc = rlgcUpTo(3);
 const line = fc.oneof(rlgc, lossless);
 const frequency = fc.oneof(decades(3, 9), fc.constant(0));
 const length = decades(-4, 1);

@@ -2,12 +2,11 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { findCalculation } from '@/lib/solvers/registry';
+import { decades, rlgcUpTo } from '../support/arbitraries';
 
 const seed = 20261204;
 const run = <Values>(property: fc.IProperty<Values>, runs = 300) => fc.assert(property, { seed, numRuns: runs });
-const decades = (low: number, high: number) => fc.double({ min: low, max: high, noNaN: true }).map((exponent) => 10 ** exponent);
-const orNone = (value: fc.Arbitrary<number>) => fc.oneof({ weight: 4, arbitrary: value }, { weight: 1, arbitrary: fc.constant(0) });
-const rlgc = fc.record({ kind: fc.constant('rlgc'), resistance_ohm_per_m: orNone(decades(-6, 5)), inductance_h_per_m: decades(-8, -5), conductance_s_per_m: orNone(decades(-10, -2)), capacitance_f_per_m: decades(-12, -9) });
+const rlgc = rlgcUpTo(5);
 const load = fc.oneof(decades(0, 4), fc.record({ re: decades(-1, 4), im: fc.double({ min: -1e3, max: 1e3, noNaN: true }) }));
 const tolerance = decades(-6, -0.31);
 

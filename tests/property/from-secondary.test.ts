@@ -3,12 +3,11 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { ImpossibleInput } from '@/lib/solvers/errors';
 import { findCalculation } from '@/lib/solvers/registry';
+import { decades, rlgcUpTo } from '../support/arbitraries';
 
 const seed = 20261203;
 const run = <Values>(property: fc.IProperty<Values>, runs = 300) => fc.assert(property, { seed, numRuns: runs });
-const decades = (low: number, high: number) => fc.double({ min: low, max: high, noNaN: true }).map((exponent) => 10 ** exponent);
-const orNone = (value: fc.Arbitrary<number>) => fc.oneof({ weight: 4, arbitrary: value }, { weight: 1, arbitrary: fc.constant(0) });
-const rlgc = fc.record({ kind: fc.constant('rlgc'), resistance_ohm_per_m: orNone(decades(-6, 5)), inductance_h_per_m: decades(-8, -5), conductance_s_per_m: orNone(decades(-10, -2)), capacitance_f_per_m: decades(-12, -9) });
+const rlgc = rlgcUpTo(5);
 
 interface Primary {
   readonly resistance_ohm_per_m: (number | null)[];

@@ -4,10 +4,10 @@ import { describe, expect, it } from 'vitest';
 import { line as lineSchema, lineOverFrequency } from '@/lib/solvers/lines/line';
 import { monotoneInterpolant } from '@/lib/solvers/numeric/monotone-interpolation';
 import { findCalculation } from '@/lib/solvers/registry';
+import { decades, numbersIn } from '../support/arbitraries';
 
 const seed = 20261202;
 const run = <Values>(property: fc.IProperty<Values>, runs = 300) => fc.assert(property, { seed, numRuns: runs });
-const decades = (low: number, high: number) => fc.double({ min: low, max: high, noNaN: true }).map((exponent) => 10 ** exponent);
 const ascending = (values: fc.Arbitrary<number>, least: number, most: number, step: (before: number) => number) =>
   fc.array(values, { minLength: least, maxLength: most }).map((each) => each.sort((a, b) => a - b).filter((value, index, all) => index === 0 || value > step(all[index - 1])));
 
@@ -80,12 +80,6 @@ const law = fc.record({ sqrt_db_per_m: anyValue(1e6), linear_db_per_m: anyValue(
 const sheet = fc.record({ kind: fc.constant('datasheet'), characteristic_impedance_ohm: decades(-3, 6), velocity_factor: decades(-3, 0), attenuation: fc.oneof(points, law) });
 const anyFrequency = fc.oneof(decades(-300, 15), fc.constantFrom(0, 1e15, 5e-324));
 
-/** Every number in a result, however deep. */
-function numbers(value: unknown): number[] {
-  if (typeof value === 'number') return [value];
-  return typeof value === 'object' && value !== null ? Object.values(value).flatMap(numbers) : [];
-}
-
 describe('a given line', () => {
   it('is finite in every calculation, over all that its schema accepts', () => {
     run(
@@ -97,7 +91,7 @@ describe('a given line', () => {
         ] as const) {
           const calculation = findCalculation(group, id)!;
           const { result } = calculation.solve(calculation.input.parse(input));
-          expect(numbers(result).every(Number.isFinite), `${group}/${id}`).toBe(true);
+          expect(numbersIn(result).every(Number.isFinite), `${group}/${id}`).toBe(true);
         }
       }),
     );

@@ -3,6 +3,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { ImpossibleInput } from '@/lib/solvers/errors';
 import { findCalculation } from '@/lib/solvers/registry';
+import { decades } from '../support/arbitraries';
 
 const seed = 20261201;
 const run = <Values>(property: fc.IProperty<Values>, runs = 200) => fc.assert(property, { seed, numRuns: runs });
@@ -50,7 +51,6 @@ function edgeByCascade(solution: Solution, load: object, side: 1 | -1, limit: nu
   return (inside + outside) / 2;
 }
 
-const decades = (low: number, high: number) => fc.double({ min: low, max: high, noNaN: true }).map((exponent) => 10 ** exponent);
 const reactance = fc.oneof({ weight: 1, arbitrary: fc.constant(0) }, { weight: 4, arbitrary: fc.double({ min: -300, max: 300, noNaN: true }) });
 const impedance = fc.record({ re: decades(0, 3), im: reactance });
 const lossless = fc.record({ kind: fc.constant('lossless'), characteristic_impedance_ohm: decades(1, 2.5), velocity_factor: fc.double({ min: 0.2, max: 1, noNaN: true }) });

@@ -5,11 +5,10 @@ import { line as lineSchema, lineOverFrequency } from '@/lib/solvers/lines/line'
 import { dispersedMicrostrip, microstripSingleModeLimitHz } from '@/lib/solvers/methods/microstrip-dispersion';
 import { microstripInductance, microstripLine, microstripRecession } from '@/lib/solvers/methods/microstrip-static';
 import { derivative } from '@/lib/solvers/numeric/derivative';
-import { findCalculation } from '@/lib/solvers/registry';
+import { decades, isFiniteEverywhere } from '../support/arbitraries';
 
 const seed = 20261204;
 const run = <Values>(property: fc.IProperty<Values>, runs = 300) => fc.assert(property, { seed, numRuns: runs });
-const decades = (low: number, high: number) => fc.double({ min: low, max: high, noNaN: true }).map((exponent) => 10 ** exponent);
 
 /** Within the method's range. */
 const shape = fc.record({ u: decades(-2, 2), tau: fc.oneof(fc.constant(0), decades(-5, Math.log10(0.2))) });
@@ -40,31 +39,17 @@ const anyMicrostrip = fc.record({
 });
 const anyFrequency = fc.oneof(decades(-300, 15), decades(3, 12), fc.constantFrom(0, 1e15, 5e-324));
 
-/** Every number in a result, however deep. */
-function numbers(value: unknown): number[] {
-  if (typeof value === 'number') return [value];
-  return typeof value === 'object' && value !== null ? Object.values(value).flatMap(numbers) : [];
-}
-
 const model = (given: object, frequency: number) => lineOverFrequency(lineSchema.parse({ kind: 'microstrip', ...given }), Float64Array.of(frequency));
 
 describe('a microstrip line', () => {
   it('is finite in every calculation, over all that its schema accepts', () => {
     run(
       fc.property(anyMicrostrip, fc.array(anyFrequency, { minLength: 1, maxLength: 4 }), (given, frequency_hz) => {
-        for (const [group, id, input] of [
-          ['lines', 'primary-constants', { line: given, frequency_hz }],
-          ['lines', 'secondary-constants', { line: given, frequency_hz }],
-          ['terminations', 'input-impedance', { line: given, length_m: 0.1, termination: 75, frequency_hz }],
-        ] as const) {
-          const calculation = findCalculation(group, id)!;
-          const { result } = calculation.solve(calculation.input.parse(input));
-          expect(numbers(result).every(Number.isFinite), `${group}/${id}`).toBe(true);
-        }
-        const { resistance, inductance, conductance, capacitance, slope } = lineOverFrequency(lineSchema.parse(given), Float64Array.from(frequency_hz)).constants;
-        for (const column of [resistance, conductance]) expect(column.every((each) => each >= 0 && Number.isFinite(each))).toBe(true);
-        for (const column of [inductance, capacitance]) expect(column.every((each) => each > 0 && Number.isFinite(each))).toBe(true);
-        for (const column of Object.values(slope!)) expect((column as Float64Array).every(Number.isFinite)).toBe(true);
+        isFiniteEverywhere(given, frequency_hz, [
+          ['lines', 'primary-constants', {}],
+          ['lines', 'secondary-constants', {}],
+          ['terminations', 'input-impedance', { length_m: 0.1, termination: 75 }],
+        ]);
       }),
       600,
     );

@@ -2,7 +2,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { findCalculation } from '@/lib/solvers/registry';
-import { ImpossibleInput } from '@/lib/solvers/errors';
+import { decades, holdsOnlyFiniteNumbers } from '../support/arbitraries';
 
 interface Parts {
   re: number;
@@ -136,7 +136,6 @@ interface CascadeResult {
 const cascaded = (input: object) => solve('cascade', { include: kinds, ...input }).result as unknown as CascadeResult;
 const given = (representation: Kind, values: object, reference_impedance_ohm?: unknown) => ({ kind: 'two_port', representation, values, ...((representation === 's' || representation === 't') && { reference_impedance_ohm }) });
 
-const decades = (low: number, high: number) => fc.double({ min: low, max: high, noNaN: true }).map((exponent) => 10 ** exponent);
 const line = fc.record({ kind: fc.constant('rlgc'), resistance_ohm_per_m: decades(-4, 2), inductance_h_per_m: decades(-7.5, -6), conductance_s_per_m: decades(-9, -3), capacitance_f_per_m: decades(-11, -9.5) });
 const part = fc.oneof(
   fc.record({ kind: fc.constant('line'), line, length_m: decades(-3, -0.5) }),
@@ -239,23 +238,10 @@ describe('every accepted input', () => {
   const anyReferences = fc.oneof(anyReference, fc.tuple(anyReference, anyReference));
   const anyMatrix = fc.constantFrom(...kinds).chain((kind) => fc.tuple(anyEntry, anyEntry, anyEntry, anyEntry).map((entries) => ({ kind, values: Object.fromEntries(names[kind].map((name, index) => [name, entries[index]])) })));
 
-  /** JSON has no NaN and no infinity; a warning stands for each null. */
-  function holdsOnlyFiniteNumbers(id: string, input: object): void {
-    const calculation = findCalculation('networks', id)!;
-    try {
-      const { result, warnings } = calculation.solve(calculation.input.parse(input));
-      const parsed = calculation.output.safeParse(result);
-      expect(parsed.error?.issues, JSON.stringify(input)).toBeUndefined();
-      if (JSON.stringify(result).includes('null')) expect(warnings.length).toBeGreaterThan(0);
-    } catch (error) {
-      if (!(error instanceof ImpossibleInput)) throw error;
-    }
-  }
-
   it('to convert gives finite numbers or null with a warning', () => {
     run(
       fc.property(anyMatrix, fc.constantFrom(...kinds), anyReferences, anyReferences, ({ kind, values }, to, refer, wanted) =>
-        holdsOnlyFiniteNumbers('convert', { from: kind, to, values, reference_impedance_ohm: refer, to_reference_impedance_ohm: wanted }),
+        holdsOnlyFiniteNumbers('networks', 'convert', { from: kind, to, values, reference_impedance_ohm: refer, to_reference_impedance_ohm: wanted }),
       ),
       2000,
     );
@@ -272,7 +258,7 @@ describe('every accepted input', () => {
   it('to cascade gives finite numbers or null with a warning', () => {
     run(
       fc.property(anyChain, anyReferences, fc.constantFrom('open', 'short', 50, { re: -1e12, im: 3 }), fc.array(extreme(1e15), { minLength: 1, maxLength: 3 }), (elements, refer, termination, frequency_hz) =>
-        holdsOnlyFiniteNumbers('cascade', { elements, frequency_hz, reference_impedance_ohm: refer, termination, include: kinds }),
+        holdsOnlyFiniteNumbers('networks', 'cascade', { elements, frequency_hz, reference_impedance_ohm: refer, termination, include: kinds }),
       ),
       2000,
     );

@@ -5,10 +5,10 @@ import { planarConstants, type PlanarLine } from '@/lib/solvers/lines/planar-con
 import { constantPermittivity, widebandDebyePermittivity } from '@/lib/solvers/methods/permittivity';
 import { planarConductorLoss, type PlanarConductor } from '@/lib/solvers/methods/planar-conductor';
 import { derivative } from '@/lib/solvers/numeric/derivative';
+import { decades } from '../support/arbitraries';
 
 const seed = 20261203;
 const run = <Values>(property: fc.IProperty<Values>, runs = 200) => fc.assert(property, { seed, numRuns: runs });
-const decades = (low: number, high: number) => fc.double({ min: low, max: high, noNaN: true }).map((exponent) => 10 ** exponent);
 
 const conductor = fc.record({
   material: fc.record({ resistivityOhmM: decades(-9, -5), relativePermeability: decades(0, 3) }),

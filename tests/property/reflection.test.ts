@@ -3,6 +3,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { ImpossibleInput } from '@/lib/solvers/errors';
 import { findCalculation } from '@/lib/solvers/registry';
+import { decades } from '../support/arbitraries';
 
 type Column = (number | null)[];
 interface Parts {
@@ -31,7 +32,6 @@ const value = (column: { re: Column; im: Column }, index = 0): Parts => ({ re: c
 const size = ({ re, im }: Parts) => Math.hypot(re, im);
 const apart = (x: Parts, y: Parts) => Math.hypot(x.re - y.re, x.im - y.im);
 
-const decades = (low: number, high: number) => fc.double({ min: low, max: high, noNaN: true }).map((exponent) => 10 ** exponent);
 const signed = (magnitude: fc.Arbitrary<number>) => fc.tuple(magnitude, fc.constantFrom(1, -1)).map(([each, sign]) => each * sign);
 const reactance = fc.oneof(fc.constant(0), signed(decades(-6, 6)));
 const passive = fc.record({ re: fc.oneof(decades(-6, 6), decades(-14, 11)), im: reactance });

@@ -3,9 +3,9 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { ImpossibleInput } from '@/lib/solvers/errors';
 import { findCalculation } from '@/lib/solvers/registry';
+import { decades } from '../support/arbitraries';
 
 const run = <Arguments>(property: fc.IProperty<Arguments>, runs = 300) => fc.assert(property, { numRuns: runs, seed: 20261201 });
-const decades = (from: number, to: number) => fc.double({ min: from, max: to, noNaN: true }).map((power) => 10 ** power);
 
 interface Constants {
   readonly resistance_ohm_per_m: number[];

@@ -2,7 +2,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { findCalculation } from '@/lib/solvers/registry';
-import { ImpossibleInput } from '@/lib/solvers/errors';
+import { decades, rlgcUpTo, lossless, holdsOnlyFiniteNumbers } from '../support/arbitraries';
 
 type Column = (number | null)[];
 interface ComplexColumn {
@@ -48,16 +48,7 @@ const secondary = (input: object) => solve('lines', 'secondary-constants', input
 const terminated = (input: object) => solve('terminations', 'input-impedance', input) as TerminatedResult;
 const cascaded = (input: object) => solve('networks', 'cascade', input) as CascadeResult;
 
-const decades = (low: number, high: number) => fc.double({ min: low, max: high, noNaN: true }).map((exponent) => 10 ** exponent);
-const orNone = (value: fc.Arbitrary<number>) => fc.oneof({ weight: 4, arbitrary: value }, { weight: 1, arbitrary: fc.constant(0) });
-const rlgc = fc.record({
-  kind: fc.constant('rlgc'),
-  resistance_ohm_per_m: orNone(decades(-6, 3)),
-  inductance_h_per_m: decades(-8, -5),
-  conductance_s_per_m: orNone(decades(-10, -2)),
-  capacitance_f_per_m: decades(-12, -9),
-});
-const lossless = fc.record({ kind: fc.constant('lossless'), characteristic_impedance_ohm: decades(0, 3), velocity_factor: fc.double({ min: 0.1, max: 1, noNaN: true }) });
+const rlgc = rlgcUpTo(3);
 const line = fc.oneof(rlgc, lossless);
 const frequency = decades(3, 9);
 const length = decades(-4, 1);
@@ -225,19 +216,6 @@ describe('every accepted input', () => {
     fc.record({ kind: fc.constantFrom('series', 'shunt'), impedance_ohm: anyComplex }),
     fc.record({ kind: fc.constant('transformer'), turns_ratio: fc.constantFrom(1e-6, 1, 1e6) }),
   );
-
-  /** JSON has no NaN and no infinity; a warning stands for each null. */
-  function holdsOnlyFiniteNumbers(group: string, id: string, input: object): void {
-    const calculation = findCalculation(group, id)!;
-    try {
-      const { result, warnings } = calculation.solve(calculation.input.parse(input));
-      const parsed = calculation.output.safeParse(result);
-      expect(parsed.error?.issues, JSON.stringify(input)).toBeUndefined();
-      if (JSON.stringify(result).includes('null')) expect(warnings.length).toBeGreaterThan(0);
-    } catch (error) {
-      if (!(error instanceof ImpossibleInput)) throw error;
-    }
-  }
 
   it('gives finite numbers or null with a warning, over the whole of its bounds', () => {
     run(fc.property(anyLine, anyFrequencies, (given, f) => holdsOnlyFiniteNumbers('lines', 'secondary-constants', { line: given, frequency_hz: f })), 3000);

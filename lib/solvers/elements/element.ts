@@ -2,11 +2,12 @@
 import { z } from 'zod';
 import { line } from '../lines/line';
 import { complexNumber } from '../nouns/complex-number';
+import { lineLength } from '../nouns/line-length';
 import { optionalPortReferenceImpedances } from '../nouns/reference-impedance';
 import { partFields } from '../nouns/termination';
 import { representations, twoPortValues } from '../nouns/two-port-values';
 
-const lengthM = z.number().min(0).max(1e9).meta({ title: 'Length', description: 'Length of the line.', examples: [0.25], 'x-unit': 'm' });
+const lengthM = lineLength(0.25);
 
 const lineElement = z
   .strictObject({ kind: z.literal('line').meta({ title: 'Kind', description: 'A length of line.', examples: ['line'] }), line, length_m: lengthM })

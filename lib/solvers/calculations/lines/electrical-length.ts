@@ -12,6 +12,7 @@ import { lumpedImpedance } from '../../methods/one-port';
 import { propagation, telegrapherPropagation, type Propagation } from '../../methods/telegrapher';
 import { frequencyColumn, nullableColumn, realColumn } from '../../nouns/columns';
 import { frequenciesHz, frequency, mostPoints, pointsOf } from '../../nouns/frequency';
+import { lineLength } from '../../nouns/line-length';
 import { finiteColumn, ResultColumns } from '../../nouns/result-columns';
 import { termination, terminationOnePort, terminationProblems, type Termination } from '../../nouns/termination';
 import { inSpaceOf, magnitude } from '../../numeric/phasor';
@@ -19,7 +20,7 @@ import { inSpaceOf, magnitude } from '../../numeric/phasor';
 const input = z
   .strictObject({
     line,
-    length_m: z.number().min(0).max(1e9).meta({ title: 'Length', description: 'Length of the line.', examples: [0.12], 'x-unit': 'm' }),
+    length_m: lineLength(0.12),
     frequency_hz: frequency,
     rise_time_s: z.number().min(1e-15).max(1e6).optional().meta({ title: 'Rise time', description: 'Of the edges on the line, 10 % to 90 %; left out where only frequency matters.', examples: [1e-9], 'x-unit': 's' }),
     tolerance: z.number().min(1e-9).max(0.5).default(0.05).meta({ title: 'Tolerance', description: 'Relative error of the input impedance that may be made.', examples: [0.05] }),

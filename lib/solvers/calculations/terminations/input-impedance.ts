@@ -12,6 +12,7 @@ import { propagation } from '../../methods/telegrapher';
 import { complexColumn, frequencyColumn, nullableColumn } from '../../nouns/columns';
 import { complexParts, type ComplexNumber } from '../../nouns/complex-number';
 import { frequenciesHz, frequency, pointsOf } from '../../nouns/frequency';
+import { lineLength } from '../../nouns/line-length';
 import { referenceImpedance, referenceProblems } from '../../nouns/reference-impedance';
 import { finiteColumn, ResultColumns } from '../../nouns/result-columns';
 import { hasParts, termination, terminationOnePort, terminationProblems, type Termination } from '../../nouns/termination';
@@ -20,7 +21,7 @@ import { inSpaceOf, magnitudes, type Phasor, type Space } from '../../numeric/ph
 const input = z
   .strictObject({
     line,
-    length_m: z.number().min(0).max(1e9).meta({ title: 'Length', description: 'Length of the line.', examples: [3.2], 'x-unit': 'm' }),
+    length_m: lineLength(3.2),
     termination,
     frequency_hz: frequency,
     reference_impedance_ohm: referenceImpedance,

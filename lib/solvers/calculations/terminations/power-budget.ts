@@ -15,6 +15,7 @@ import { propagation } from '../../methods/telegrapher';
 import { frequencyColumn, nullableColumn, realColumn } from '../../nouns/columns';
 import { complexNumber, complexParts } from '../../nouns/complex-number';
 import { frequenciesHz, frequency, pointsOf } from '../../nouns/frequency';
+import { lineLength } from '../../nouns/line-length';
 import { finiteColumn, ResultColumns } from '../../nouns/result-columns';
 import { hasParts, termination, terminationOnePort, terminationProblems } from '../../nouns/termination';
 import { inSpaceOf, magnitudes } from '../../numeric/phasor';
@@ -22,7 +23,7 @@ import { inSpaceOf, magnitudes } from '../../numeric/phasor';
 const input = z
   .strictObject({
     line,
-    length_m: z.number().min(0).max(1e9).meta({ title: 'Length', description: 'Length of the line.', examples: [3.2], 'x-unit': 'm' }),
+    length_m: lineLength(3.2),
     termination,
     frequency_hz: frequency,
     source_impedance_ohm: complexNumber.default(50).meta({ title: 'Source impedance', description: 'Inside the source; its real part must be greater than 0.', examples: [50], 'x-unit': 'ohm' }),

@@ -11,13 +11,15 @@ interface FigureProps {
   readonly unit?: ReactNode;
   /** The exact value, shown on hover. */
   readonly exact?: string;
+  /** Words take as many lines as they need; a number stays on one. */
+  readonly inWords?: boolean;
 }
 
-export function Figure({ label, value, unit, exact }: FigureProps) {
+export function Figure({ label, value, unit, exact, inWords = false }: FigureProps) {
   return (
     <div className="min-w-0" title={exact}>
       <dt className="text-fine text-ash">{label}</dt>
-      <dd className="font-mono text-figure font-medium whitespace-nowrap">
+      <dd className={inWords ? 'text-body font-medium' : 'font-mono text-figure font-medium whitespace-nowrap'}>
         {value}
         {unit && <small className="ml-2 text-fine font-normal text-ash">{unit}</small>}
       </dd>

@@ -22,7 +22,7 @@ export function PartFigures({ part, index }: { readonly part: ResultPart; readon
       <Figures>
         {figures.map((quantity) => {
           const { value, unit } = showAt(quantity, index);
-          return <Figure key={quantity.pointer} label={quantity.title} value={value} unit={unit || undefined} exact={exactAt(quantity, index)} />;
+          return <Figure key={quantity.pointer} label={quantity.title} value={value} unit={unit || undefined} exact={exactAt(quantity, index)} inWords={quantity.kind === 'word'} />;
         })}
       </Figures>
     </div>

@@ -54,7 +54,7 @@ function Singles({ quantities }: { readonly quantities: ResultPart['singles'] })
         return (
           <div key={quantity.pointer} className="flex min-h-8 items-baseline justify-between gap-4 border-b border-rule py-1" title={exactAt(quantity, 0)}>
             <dt className="text-ash">{quantity.title}</dt>
-            <dd className="font-mono text-[13px] whitespace-nowrap">
+            <dd className={`font-mono text-[13px] ${quantity.kind === 'word' ? '' : 'whitespace-nowrap'}`}>
               {value} {unit}
             </dd>
           </div>

@@ -84,9 +84,11 @@ export function PanelPlot({ panel, axis, cursor, onDrawn }: PanelPlotProps) {
       </div>
       <p className="flex flex-wrap gap-x-4 pl-[52px] font-mono text-[11.5px] leading-5 text-ash">
         {reading.map(({ label, value, unit }, index) => (
-          <span key={label || index} className="whitespace-nowrap">
+          <span key={label || index}>
             {several && <span style={{ color: lineStyles[index].colour }}>{label} </span>}
-            <span className="text-ink">{value}</span> {unit}
+            <span className="whitespace-nowrap">
+              <span className="text-ink">{value}</span> {unit}
+            </span>
           </span>
         ))}
       </p>
